@@ -1,0 +1,33 @@
+using System.Collections.Immutable;
+using FiberScope.Fibres;
+using UnitsNet;
+
+namespace FiberScope.Filtration;
+
+/// <summary>What a rig would show for a medium, by the model.</summary>
+public sealed record MediaForecast
+{
+    /// <summary>The correlation set that the central values come from.</summary>
+    public required CorrelationSet Correlations { get; init; }
+
+    /// <summary>The operating point of the forecast.</summary>
+    public required OperatingPoint OperatingPoint { get; init; }
+
+    /// <summary>Pressure drop across all layers.</summary>
+    public required Pressure PressureDrop { get; init; }
+
+    /// <summary>Penetration against particle size, smallest particle first.</summary>
+    public required ImmutableArray<CurvePoint> Curve { get; init; }
+
+    /// <summary>The most-penetrating particle size; null when penetration has no maximum inside 10 nm to 2 µm.</summary>
+    public required Length? MostPenetratingSize { get; init; }
+
+    /// <summary>Penetration at the most-penetrating size; the curve's largest where there is none. Dimensionless, 0 to 1.</summary>
+    public required double PenetrationAtMostPenetratingSize { get; init; }
+
+    /// <summary>Quality factor −ln P / Δp at the most-penetrating size; 1/Pa.</summary>
+    public required double QualityFactorPerPascal { get; init; }
+
+    /// <summary>What a reader must know: ranges left, models that do not apply.</summary>
+    public required ImmutableArray<Caveat> Caveats { get; init; }
+}

@@ -1,0 +1,34 @@
+using System.Collections.Immutable;
+
+namespace FiberScope.Imaging;
+
+/// <summary>All that one field of view gave.</summary>
+public sealed record FieldMeasurement
+{
+    /// <summary>The picture that was measured.</summary>
+    public required Micrograph Micrograph { get; init; }
+
+    /// <summary>Whether the field was fit for measuring.</summary>
+    public required FieldFitness Fitness { get; init; }
+
+    /// <summary>The centre lines found.</summary>
+    public required ImmutableArray<Trace> Traces { get; init; }
+
+    /// <summary>The accepted readings; empty when the field shows no measurable fibre.</summary>
+    public required ImmutableArray<PixelReading> Readings { get; init; }
+
+    /// <summary>How many stations along traces were refused, by reason (a short stable name such as <c>one-edge-hidden</c>).</summary>
+    public required ImmutableSortedDictionary<string, int> Rejected { get; init; }
+
+    /// <summary>Regions that are not single fibres.</summary>
+    public required ImmutableArray<DefectRegion> Defects { get; init; }
+
+    /// <summary>The smallest diameter that this picture's pixel size, blur and noise can show; pixels.</summary>
+    public required double DetectionLimitPixels { get; init; }
+
+    /// <summary>The estimated blur of the picture as the sigma of a Gaussian; pixels.</summary>
+    public required double BlurPixels { get; init; }
+
+    /// <summary>Name and version of the algorithms, kept with every result.</summary>
+    public required string Algorithm { get; init; }
+}
