@@ -10,4 +10,5 @@ namespace FiberScope.Fibres;
 /// </param>
 /// <param name="Fibre">Which fibre (trace) of the field the reading lies on; readings on one fibre are not independent.</param>
 /// <param name="Field">Which field of view the reading comes from; readings in one field are not independent.</param>
-public readonly record struct DiameterReading(Length Diameter, Length StandardUncertainty, Length RepresentedLength, int Fibre, int Field);
+/// <param name="Swatch">Which swatch the field was cut from; fields of one swatch are not independent. Field numbers are unique across swatches.</param>
+public readonly record struct DiameterReading(Length Diameter, Length StandardUncertainty, Length RepresentedLength, int Fibre, int Field, int Swatch = 0);

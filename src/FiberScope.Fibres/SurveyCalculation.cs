@@ -73,21 +73,29 @@ internal sealed class SurveyCalculation
         new(Length.FromMeters(Math.Max(0, centre - half)), Length.FromMeters(centre + half));
 
     /// <summary>
-    /// The sampling variance that fibres alone explain, what fields add to it, and the two systematic parts.
+    /// The sampling variance that fibres alone explain, what fields and swatches add to it, and the two systematic parts.
     /// </summary>
     private UncertaintyBudget Budget()
     {
         var byFibre = ClusteredMean.Of(_diameters, _lengths, _fibres);
         var byField = ClusteredMean.Of(_diameters, _lengths, _fields);
-        var extra = (byField.StandardError * byField.StandardError) - (byFibre.StandardError * byFibre.StandardError);
+        var bySwatch = ClusteredMean.Of(_diameters, _lengths, [.. _readings.Select(r => r.Swatch)]);
+        var (fibres, fields) = (Square(byFibre), Square(byField));
+        var swatches = Square(bySwatch) - Math.Max(fibres, fields);
         return new UncertaintyBudget(
         [
             new("scale", Length.FromMeters(byFibre.Mean * _settings.ScaleRelativeUncertainty), double.PositiveInfinity, "The pixel size, the same for every reading."),
             new("edge", _settings.EdgeUncertainty, double.PositiveInfinity, "Where the edge of a fibre is, what remains in common after the correction."),
             new("fibres", Length.FromMeters(byFibre.StandardError), Math.Max(1, byFibre.DegreesOfFreedom), "Fibre-to-fibre spread: other fibres of the same fields would have given another mean."),
-            new("fields", Length.FromMeters(Math.Sqrt(Math.Max(0, extra))), Math.Max(1, byField.DegreesOfFreedom), "Field-to-field spread beyond what the fibres explain."),
+            new("fields", Length.FromMeters(Math.Sqrt(Math.Max(0, fields - fibres))), Math.Max(1, byField.DegreesOfFreedom), "Field-to-field spread beyond what the fibres explain."),
+            .. bySwatch.Clusters == 1 ? (BudgetPart[])[] :
+            [
+                new("swatches", Length.FromMeters(Math.Sqrt(Math.Max(0, swatches))), bySwatch.DegreesOfFreedom, "Swatch-to-swatch spread beyond what the fields explain."),
+            ],
         ]);
     }
+
+    private static double Square(ClusteredMean mean) => mean.StandardError * mean.StandardError;
 
     private double NumberHalfWidth()
     {
