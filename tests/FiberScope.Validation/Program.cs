@@ -1,1 +1,9 @@
-return 0;
+using System.CommandLine;
+using FiberScope.Validation.Filtration;
+
+var root = new RootCommand("Measures FiberScope against outside references and writes what it finds to docs/validation.md.")
+{
+    FiltrationCommand.Create(),
+};
+
+return root.Parse(args).Invoke();

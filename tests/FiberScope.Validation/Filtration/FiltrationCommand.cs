@@ -1,0 +1,15 @@
+using System.CommandLine;
+
+namespace FiberScope.Validation.Filtration;
+
+/// <summary>The subcommand <c>filtration</c>: the filtration model against a numerical solution and measured media.</summary>
+internal static class FiltrationCommand
+{
+    /// <summary>Makes the subcommand.</summary>
+    public static Command Create()
+    {
+        var command = new Command("filtration", "Compare the filtration model with the numerical cell solution and with measured media.");
+        command.SetAction(_ => 0);
+        return command;
+    }
+}
