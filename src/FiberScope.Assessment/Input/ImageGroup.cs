@@ -1,0 +1,20 @@
+using System.Collections.Immutable;
+using UnitsNet;
+
+namespace FiberScope.Assessment.Input;
+
+/// <summary>Images that share a scale.</summary>
+public sealed record ImageGroup
+{
+    /// <summary>Paths and globs, relative to the swatch file; at least one.</summary>
+    public required ImmutableArray<string> Patterns { get; init; }
+
+    /// <summary>The side of a pixel on the specimen; null when the images must tell it.</summary>
+    public Stated<Length>? PixelSize { get; init; }
+
+    /// <summary>The length of the scale bar to be found in the information strip; null when there is none to look for.</summary>
+    public Length? ScaleBar { get; init; }
+
+    /// <summary>The line of the swatch file, from 1; 0 when the group comes from elsewhere.</summary>
+    public int Line { get; init; }
+}

@@ -1,0 +1,160 @@
+using UnitsNet;
+using YamlDotNet.RepresentationModel;
+
+namespace FiberScope.Assessment.Input;
+
+/// <summary>Reads the keys of one YAML mapping; what is asked for is known, everything else is an error.</summary>
+internal sealed class MapReader(InputText file, YamlMappingNode node)
+{
+    private readonly HashSet<string> _known = new(StringComparer.Ordinal);
+
+    public int Line => (int)node.Start.Line;
+
+    public InputText File => file;
+
+    public bool Has(string key) => Find(key) is not null;
+
+    /// <summary>The value of a key, whatever it is; null when absent.</summary>
+    public YamlNode? Find(string key)
+    {
+        _known.Add(key);
+        return node.Children.FirstOrDefault(pair => pair.Key is YamlScalarNode scalar && scalar.Value == key).Value;
+    }
+
+    public void Complain(string key, string message) => file.Report(Find(key) ?? node, $"{key}: {message}");
+
+    /// <summary>A text; null when absent or when the value is no text.</summary>
+    public string? Text(string key)
+    {
+        switch (Find(key))
+        {
+            case null:
+                return null;
+            case YamlScalarNode { Value.Length: > 0 } scalar:
+                return scalar.Value;
+            case YamlScalarNode:
+                Complain(key, "is empty; give a value or delete the line");
+                return null;
+            default:
+                Complain(key, "a single value is wanted here");
+                return null;
+        }
+    }
+
+    /// <summary>A quantity above zero; null when absent or wrong.</summary>
+    public Stated<T>? Positive<T>(string key, QuantityKind<T> kind)
+        where T : struct, IQuantity
+    {
+        var stated = Quantity(key, kind);
+        if (stated is null || (double)stated.Value.Value > 0)
+        {
+            return stated;
+        }
+
+        Complain(key, $"'{Text(key)}' must be above zero, such as {kind.Example}");
+        return null;
+    }
+
+    /// <summary>A quantity of any sign; null when absent or wrong.</summary>
+    public Stated<T>? Quantity<T>(string key, QuantityKind<T> kind)
+        where T : struct, IQuantity
+    {
+        if (Text(key) is not { } text)
+        {
+            return null;
+        }
+
+        if (QuantityText.Read(text, kind, out var stated) is { } complaint)
+        {
+            Complain(key, complaint);
+        }
+
+        return stated;
+    }
+
+    /// <summary>A pure number strictly between two limits, as <c>0.08</c> or <c>8 %</c>; null when absent or wrong.</summary>
+    public double? Inside(string key, double low, double high) =>
+        Pure(key, value => value > low && value < high, FormattableString.Invariant($"must lie between {low} and {high}, both excluded"));
+
+    /// <summary>A pure number between two limits or on one of them; null when absent or wrong.</summary>
+    public double? Within(string key, double low, double high) =>
+        Pure(key, value => value >= low && value <= high, FormattableString.Invariant($"must lie from {low} to {high}"));
+
+    /// <summary>One of several words; null when absent or wrong.</summary>
+    public T? Choice<T>(string key, IReadOnlyDictionary<string, T> words)
+        where T : struct
+    {
+        if (Text(key) is not { } text)
+        {
+            return null;
+        }
+
+        if (words.TryGetValue(text, out var found))
+        {
+            return found;
+        }
+
+        Complain(key, $"'{text}' is not one of {string.Join(", ", words.Keys)}");
+        return null;
+    }
+
+    /// <summary>A mapping; null when absent or when the value is none.</summary>
+    public MapReader? Map(string key) => Find(key) is { } value ? AsMap(value, key) : null;
+
+    /// <summary>The items of a list; empty when absent; a single value counts as a list of one.</summary>
+    public IReadOnlyList<YamlNode> Items(string key) => Find(key) switch
+    {
+        null => [],
+        YamlSequenceNode sequence => [.. sequence.Children],
+        var single => [single],
+    };
+
+    /// <summary>An item of a list as a mapping; null, with a complaint, when it is none.</summary>
+    public MapReader? AsMap(YamlNode value, string key)
+    {
+        if (value is YamlMappingNode map)
+        {
+            return new MapReader(file, map);
+        }
+
+        file.Report(value, $"{key}: keys with values are wanted here");
+        return null;
+    }
+
+    /// <summary>Reports every key that nobody asked for, with the nearest known one.</summary>
+    public void RejectUnknownKeys()
+    {
+        foreach (var key in node.Children.Keys)
+        {
+            var name = (key as YamlScalarNode)?.Value ?? key.ToString();
+            if (!_known.Contains(name))
+            {
+                var nearest = Spelling.Nearest(name, _known);
+                var hint = nearest is null ? "known here: " + string.Join(", ", _known.Order(StringComparer.Ordinal)) : $"did you mean '{nearest}'?";
+                file.Report(key, $"unknown key '{name}'; {hint}");
+            }
+        }
+    }
+
+    private double? Pure(string key, Func<double, bool> sound, string rule)
+    {
+        if (Text(key) is not { } text)
+        {
+            return null;
+        }
+
+        if (QuantityText.ReadPure(text, out var value) is { } complaint)
+        {
+            Complain(key, complaint);
+            return null;
+        }
+
+        if (sound(value))
+        {
+            return value;
+        }
+
+        Complain(key, $"'{text}' {rule}");
+        return null;
+    }
+}

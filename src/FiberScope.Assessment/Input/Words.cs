@@ -1,0 +1,31 @@
+using FiberScope.Filtration;
+using FiberScope.Imaging;
+
+namespace FiberScope.Assessment.Input;
+
+/// <summary>The words that files, commands and machine output use for choices.</summary>
+public static class Words
+{
+    /// <summary>How a micrograph was made, by the word that files use.</summary>
+    public static IReadOnlyDictionary<string, ImagingMode> ImagingModes { get; } = new Dictionary<string, ImagingMode>(StringComparer.Ordinal)
+    {
+        ["sem"] = ImagingMode.SecondaryElectron,
+        ["transmitted"] = ImagingMode.Transmitted,
+        ["cross-section"] = ImagingMode.CrossSection,
+    };
+
+    /// <summary>The correlation sets, by the word that files use.</summary>
+    public static IReadOnlyDictionary<string, CorrelationSet> Correlations { get; } = new Dictionary<string, CorrelationSet>(StringComparer.Ordinal)
+    {
+        ["kirsch-stechkina-1978"] = CorrelationSet.KirschStechkina1978,
+        ["lee-liu-1982"] = CorrelationSet.LeeLiu1982,
+        ["hinds-1999"] = CorrelationSet.Hinds1999,
+    };
+
+    /// <summary>The word for a choice.</summary>
+    /// <exception cref="KeyNotFoundException">The choice has no word.</exception>
+    public static string Of<T>(IReadOnlyDictionary<string, T> words, T choice)
+        where T : struct =>
+        words.FirstOrDefault(pair => EqualityComparer<T>.Default.Equals(pair.Value, choice)).Key
+        ?? throw new KeyNotFoundException($"No word for {choice}.");
+}

@@ -1,0 +1,14 @@
+namespace FiberScope.Assessment.Json;
+
+/// <summary>The names and versions of the machine-readable outputs.</summary>
+public static class Schemas
+{
+    /// <summary>What measuring alone gives.</summary>
+    public const string Measurement = "fiberscope/measurement/1";
+
+    /// <summary>What predicting alone gives.</summary>
+    public const string Prediction = "fiberscope/prediction/1";
+
+    /// <summary>A whole assessment.</summary>
+    public const string Assessment = "fiberscope/assessment/1";
+}
