@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Conformity;
 using FiberScope.Fibres;
 using FiberScope.Filtration;
 
@@ -24,6 +25,9 @@ public sealed record SwatchAssessment
 
     /// <summary>What a rig measured on this material, beside the forecast for the same conditions.</summary>
     public required ImmutableArray<RigPoint> RigPoints { get; init; }
+
+    /// <summary>The verdict against the grade; null when the swatch file names none.</summary>
+    public required GradeVerdict? Verdict { get; init; }
 
     /// <summary>How to repeat the result.</summary>
     public required Recipe Recipe { get; init; }

@@ -114,6 +114,6 @@ public static class GradeReader
         var other => throw new NotSupportedException($"No way to read a {other.QuantityInfo.Name}."),
     };
 
-    private static IQuantity? Pure(MapReader map, string key, double low, double high) =>
+    private static Ratio? Pure(MapReader map, string key, double low, double high) =>
         map.Within(key, low, high) is { } value ? Ratio.FromDecimalFractions(Require.Finite(value)) : null;
 }

@@ -30,19 +30,22 @@ internal sealed class InputText
 
     /// <summary>Reads a file from disk.</summary>
     /// <exception cref="InputException">The file is missing, cannot be read, or is no YAML mapping.</exception>
-    public static InputText FromFile(string path)
+    /// <param name="path">Where the file is.</param>
+    /// <param name="name">What to call it in messages; the path when null.</param>
+    public static InputText FromFile(string path, string? name = null)
     {
+        name ??= path;
         try
         {
-            return new InputText(path, File.ReadAllText(path));
+            return new InputText(name, File.ReadAllText(path));
         }
         catch (Exception e) when (e is FileNotFoundException or DirectoryNotFoundException)
         {
-            throw new InputException([new InputProblem(path, 0, Directory.Exists(path) ? "is a folder; name the YAML file in it" : "no such file")]);
+            throw new InputException([new InputProblem(name, 0, Directory.Exists(path) ? "is a folder; name the YAML file in it" : "no such file")]);
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
         {
-            throw new InputException([new InputProblem(path, 0, Directory.Exists(path) ? "is a folder; name the YAML file in it" : "cannot be read: " + FirstLine(e.Message))]);
+            throw new InputException([new InputProblem(name, 0, Directory.Exists(path) ? "is a folder; name the YAML file in it" : "cannot be read: " + FirstLine(e.Message))]);
         }
     }
 
@@ -50,12 +53,14 @@ internal sealed class InputText
 
     public void Report(int line, string message) => _problems.Add(new InputProblem(Name, line, message));
 
+    public void Report(IEnumerable<InputProblem> problems) => _problems.AddRange(problems);
+
     /// <exception cref="InputException">Problems were reported.</exception>
     public void ThrowIfProblems()
     {
         if (_problems.Count > 0)
         {
-            throw new InputException(_problems.OrderBy(p => p.Line));
+            throw new InputException(_problems.OrderBy(p => p.File != Name).ThenBy(p => p.Line));
         }
     }
 
@@ -64,13 +69,19 @@ internal sealed class InputText
     private YamlMappingNode Parse()
     {
         var stream = new YamlStream();
+        var scanner = new Scanner(new StringReader(Text));
         try
         {
-            stream.Load(new StringReader(Text));
+            stream.Load(new Parser(scanner));
         }
         catch (YamlException e)
         {
             throw Single((int)e.Start.Line, "not valid YAML: " + Words(e));
+        }
+        catch (InvalidOperationException)
+        {
+            // Some broken flow collections trip the scanner itself, which then tells no place of its own.
+            throw Single((int)scanner.CurrentPosition.Line, "not valid YAML: the structure cannot be read here");
         }
 
         if (stream.Documents.Count > 1)

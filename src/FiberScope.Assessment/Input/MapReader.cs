@@ -21,7 +21,12 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
         return node.Children.FirstOrDefault(pair => pair.Key is YamlScalarNode scalar && scalar.Value == key).Value;
     }
 
-    public void Complain(string key, string message) => file.Report(Find(key) ?? node, $"{key}: {message}");
+    /// <summary>Reports a problem at the line of a key, or of the mapping where the key is absent.</summary>
+    public void Complain(string key, string message)
+    {
+        _known.Add(key);
+        file.Report(node.Children.Keys.FirstOrDefault(k => k is YamlScalarNode scalar && scalar.Value == key) ?? node, $"{key}: {message}");
+    }
 
     /// <summary>A text; null when absent or when the value is no text.</summary>
     public string? Text(string key)

@@ -115,7 +115,7 @@ internal static partial class QuantityText
     [GeneratedRegex(@"±|\+/-|\+-", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]
     private static partial Regex PlusMinus();
 
-    [GeneratedRegex(@"^(?<number>[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(?<unit>[^\d\s,.+-].*)?$", RegexOptions.CultureInvariant | RegexOptions.ExplicitCapture, matchTimeoutMilliseconds: 1000)]
+    [GeneratedRegex(@"^(?<number>[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(?<unit>(?:[^\d\s,.+-]|1/).*)?$", RegexOptions.CultureInvariant | RegexOptions.ExplicitCapture, matchTimeoutMilliseconds: 1000)]
     private static partial Regex NumberAndUnit();
 
     [GeneratedRegex(@"\d,\d", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Conformity;
 using FiberScope.Filtration;
 
 namespace FiberScope.Assessment.Input;
@@ -26,6 +27,9 @@ public sealed record SwatchFile
 
     /// <summary>What a rig measured; may be empty.</summary>
     public required ImmutableArray<RigTest> RigTests { get; init; }
+
+    /// <summary>The limits to judge by; null when none are named.</summary>
+    public required Grade? Grade { get; init; }
 
     /// <summary>Every value of the file with its line, for the record.</summary>
     public required ImmutableArray<RecipeEntry> Entries { get; init; }

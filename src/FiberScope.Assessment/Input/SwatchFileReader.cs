@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Conformity;
 using FiberScope.Filtration;
 using YamlDotNet.RepresentationModel;
 
@@ -15,6 +16,9 @@ internal static class SwatchFileReader
         var correlations = map.Choice("correlations", Words.Correlations);
         var layers = Layers(map, map.Has("face_velocity") || map.Has("flow"));
         var tests = RigTests(map, operation);
+        var hashes = ImmutableSortedDictionary.CreateBuilder<string, string>(StringComparer.Ordinal);
+        hashes[file.Name] = file.Sha256;
+        var grade = ReadGrade(map, folder, hashes);
         map.RejectUnknownKeys();
         file.ThrowIfProblems();
         return new SwatchFile
@@ -26,9 +30,31 @@ internal static class SwatchFileReader
             Operation = operation,
             Correlations = correlations,
             RigTests = tests,
+            Grade = grade,
             Entries = [.. Entries(file.Root, "")],
-            FileHashes = ImmutableSortedDictionary.Create<string, string>(StringComparer.Ordinal).Add(file.Name, file.Sha256),
+            FileHashes = hashes.ToImmutable(),
         };
+    }
+
+    /// <summary>The grade that the file names; its own problems join those of the swatch file.</summary>
+    private static Grade? ReadGrade(MapReader map, string folder, ImmutableSortedDictionary<string, string>.Builder hashes)
+    {
+        if (map.Text("grade") is not { } path)
+        {
+            return null;
+        }
+
+        try
+        {
+            var text = InputText.FromFile(Path.Combine(folder, path), Path.Combine(Path.GetDirectoryName(map.File.Name) ?? "", path));
+            hashes[path] = text.Sha256;
+            return GradeReader.Read(text);
+        }
+        catch (InputException e)
+        {
+            map.File.Report(e.Problems);
+            return null;
+        }
     }
 
     private static SwatchIdentity Identity(MapReader map, string file)
