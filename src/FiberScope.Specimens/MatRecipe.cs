@@ -47,11 +47,14 @@ public sealed record MatRecipe
     public AreaDensity BasisWeight => AreaDensity.FromKilogramsPerSquareMeter(Solidity * FibreDensity.KilogramsPerCubicMeter * Thickness.Meters);
 
     /// <inheritdoc/>
-    public bool Equals(MatRecipe? other) => other is not null
-        && Fibres.SequenceEqual(other.Fibres)
-        && (Solidity, Thickness, FibreDensity, OrientationOrder, PreferredDirection) == (other.Solidity, other.Thickness, other.FibreDensity, other.OrientationOrder, other.PreferredDirection)
-        && (Wander, WanderLength, DiameterUnevenness, PairedShare, DeepestCover) == (other.Wander, other.WanderLength, other.DiameterUnevenness, other.PairedShare, other.DeepestCover);
+    public bool Equals(MatRecipe? other) => other is not null && Fibres.SequenceEqual(other.Fibres) && Numbers.SequenceEqual(other.Numbers);
 
     /// <inheritdoc/>
-    public override int GetHashCode() => HashCode.Combine(Fibres.Length, Solidity, Thickness, OrientationOrder, DeepestCover);
+    public override int GetHashCode() => HashCode.Combine(Fibres.Length, Solidity, OrientationOrder, DeepestCover);
+
+    private double[] Numbers =>
+    [
+        Solidity, Thickness.Meters, FibreDensity.KilogramsPerCubicMeter, OrientationOrder, PreferredDirection.Radians,
+        Wander.Radians, WanderLength.Meters, DiameterUnevenness, PairedShare, DeepestCover,
+    ];
 }

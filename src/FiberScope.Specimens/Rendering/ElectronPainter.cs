@@ -16,7 +16,7 @@ internal static class ElectronPainter
         var shader = new ElectronShader(mat, set, heights, seed);
         var blur = new DepthBlur(camera, width, height);
         var pattern = SamplePattern.Scattered(seed);
-        EachTile(mat, set, pattern, shift, cancellation, (tile, left, upper, columns, rows) =>
+        EachTile(mat, set, pattern, shift, (tile, left, upper, columns, rows) =>
         {
             for (var row = upper; row < upper + rows; row++)
             {
@@ -25,7 +25,7 @@ internal static class ElectronPainter
                     Light(mat, tile, shader, blur, pattern.Count, column, row);
                 }
             }
-        });
+        }, cancellation);
         var light = blur.Compose();
         Glow(light, mat);
         return new Scene(light, top, shift, blur.SigmaAt);
@@ -51,7 +51,7 @@ internal static class ElectronPainter
         var width = mat.Scale.Width;
         var heights = new float[width * mat.Scale.Height];
         var top = new int[heights.Length];
-        EachTile(mat, set, SamplePattern.Centre, shift, cancellation, (tile, left, upper, columns, rows) =>
+        EachTile(mat, set, SamplePattern.Centre, shift, (tile, left, upper, columns, rows) =>
         {
             for (var row = upper; row < upper + rows; row++)
             {
@@ -62,7 +62,7 @@ internal static class ElectronPainter
                     top[(row * width) + column] = tile.Id[sample] >= 0 ? set.Segments[tile.Id[sample]].Fibre : tile.Id[sample];
                 }
             }
-        });
+        }, cancellation);
         return (heights, top);
     }
 
@@ -79,7 +79,7 @@ internal static class ElectronPainter
     }
 
     private static void EachTile(
-        MatModel mat, SegmentSet set, SamplePattern pattern, float[] shift, CancellationToken cancellation, Action<TileRaster, int, int, int, int> use)
+        MatModel mat, SegmentSet set, SamplePattern pattern, float[] shift, Action<TileRaster, int, int, int, int> use, CancellationToken cancellation)
     {
         var options = new ParallelOptions { CancellationToken = cancellation };
         Parallel.For(0, set.Tiles.Length, options, () => new TileRaster(mat, set, pattern, shift), (index, _, tile) =>
