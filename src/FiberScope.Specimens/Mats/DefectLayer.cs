@@ -16,7 +16,7 @@ internal sealed class DefectLayer(MatScale scale, FibreCurve[] fibres, SeededRan
             var half = Size(_defects.ShotSize, 0.5) / 2;
             var (sin, cos) = PortableMath.SinCos(Math.PI * random.Next());
             var (x, y) = Place();
-            _bodies.Add(new(DefectForm.Shot, _group++, x, y, Height(0.5), (float)(half * random.Between(1, 1.25)), (float)half, (float)cos, (float)sin, Shine()));
+            _bodies.Add(new(DefectForm.Shot, _group++, x, y, Height(1), (float)(half * random.Between(1, 1.25)), (float)half, (float)cos, (float)sin, Shine()));
         }
 
         Beads();
@@ -29,7 +29,7 @@ internal sealed class DefectLayer(MatScale scale, FibreCurve[] fibres, SeededRan
         for (var i = 0; i < films.Length; i++)
         {
             var (x, y) = Place();
-            films[i] = new FilmPatch(_group++, x, y, Height(0.35), Size(_defects.FilmSize, 0.35) / 2, random);
+            films[i] = new FilmPatch(_group++, x, y, Height(0.9), Size(_defects.FilmSize, 0.35) / 2, random);
         }
 
         return ([.. _bodies], films);
@@ -37,7 +37,7 @@ internal sealed class DefectLayer(MatScale scale, FibreCurve[] fibres, SeededRan
 
     private void Beads()
     {
-        var upper = fibres.Take(Math.Max(1, fibres.Length / 2)).ToArray();
+        var upper = fibres.Take(Math.Max(1, fibres.Length / 5)).ToArray();
         for (var i = 0; i < _defects.Beads && upper.Length > 0; i++)
         {
             var fibre = upper[random.Below(upper.Length)];
@@ -50,7 +50,7 @@ internal sealed class DefectLayer(MatScale scale, FibreCurve[] fibres, SeededRan
     private void Clump()
     {
         var (x, y) = Place();
-        var z = Height(0.25);
+        var z = Height(0.7);
         var size = Size(_defects.DebrisSize, 0.45);
         var grains = 6 + random.Below(25);
         for (var g = 0; g < grains; g++)
@@ -68,7 +68,8 @@ internal sealed class DefectLayer(MatScale scale, FibreCurve[] fibres, SeededRan
 
     private double Size(double meanDiameters, double sigma) => scale.MeanDiameter * meanDiameters * PortableMath.Exp(sigma * Math.Clamp(random.Normal(), -2, 2));
 
-    private float Height(double share) => (float)(scale.LaidDepth * (1 - (share * random.Next())));
+    // Down to so many mean depths below the top: deeper ones would hardly be seen.
+    private float Height(double depths) => (float)Math.Max(0, scale.LaidDepth - (scale.MeanDepth * depths * random.Between(-0.1, 1)));
 
     private float Shine() => (float)random.Between(0.75, 1.3);
 
