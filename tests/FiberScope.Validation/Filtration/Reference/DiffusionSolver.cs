@@ -19,6 +19,9 @@ internal enum RimCondition
 /// </remarks>
 internal static class DiffusionSolver
 {
+    /// <summary>Cells in θ that keep the error of one grid near 0.01 %; near 0.5 % at Pe 1e6.</summary>
+    public static int CellsFor(double peclet) => peclet < 2e4 ? 64 : peclet < 2e5 ? 96 : 128;
+
     /// <summary>The efficiency by Richardson extrapolation from a grid and one twice as fine.</summary>
     public static double Extrapolated(CellFlow flow, double peclet, double ratio, int cells = 48, RimCondition rim = RimCondition.Flux)
     {
