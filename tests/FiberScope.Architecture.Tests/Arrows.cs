@@ -30,8 +30,7 @@ internal static class Arrows
         ["SixLabors.ImageSharp"] = ["Imaging", "Reports", "Specimens"],
         ["YamlDotNet"] = ["Assessment", "Specimens"],
         ["Microsoft.Extensions.FileSystemGlobbing"] = ["Assessment"],
-        ["ScottPlot"] = ["Reports"],
-        ["Fluid.Core"] = ["Reports"],
+        ["OxyPlot.Core"] = ["Reports"],
         ["System.CommandLine"] = ["Cli"],
         ["Spectre.Console"] = ["Cli"],
     };
