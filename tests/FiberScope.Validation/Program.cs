@@ -1,9 +1,11 @@
 using System.CommandLine;
 using FiberScope.Validation.Filtration;
+using FiberScope.Validation.Imaging;
 
 var root = new RootCommand("Measures FiberScope against outside references and writes what it finds to docs/validation.md.")
 {
     FiltrationCommand.Create(),
+    ImagingCommand.Create(),
 };
 
 return root.Parse(args).Invoke();

@@ -10,6 +10,8 @@ internal static class PortableMath
     private const double LogTwoHigh = 0.693147180369123816490, LogTwoLow = 1.90821492927058770002e-10;
     private const double HalfPiHigh = 1.57079632673412561417, HalfPiLow = 6.07710050650619224932e-11;
 
+    private static readonly double[] Reciprocals = [.. Enumerable.Range(0, 24).Select(i => i == 0 ? 0 : 1.0 / i)];
+
     public static double Exp(double x)
     {
         if (x < -700)
@@ -20,9 +22,9 @@ internal static class PortableMath
         var k = Math.Floor((x / (LogTwoHigh + LogTwoLow)) + 0.5);
         var r = x - (k * LogTwoHigh) - (k * LogTwoLow);
         var sum = 1.0;
-        for (var i = 14; i >= 1; i--)
+        for (var i = 13; i >= 1; i--)
         {
-            sum = 1 + (r * sum / i);
+            sum = 1 + (r * sum * Reciprocals[i]);
         }
 
         return sum * BitConverter.Int64BitsToDouble(((long)k + 1023) << 52);
@@ -45,7 +47,7 @@ internal static class PortableMath
         var sum = 0.0;
         for (var i = 23; i >= 1; i -= 2)
         {
-            sum = (sum * square) + (1.0 / i);
+            sum = (sum * square) + Reciprocals[i];
         }
 
         return (2 * s * sum) + (exponent * LogTwoLow) + (exponent * LogTwoHigh);
@@ -61,8 +63,8 @@ internal static class PortableMath
         double sin = 1, cos = 1;
         for (var i = 16; i >= 2; i -= 2)
         {
-            sin = 1 - (square * sin / (i * (i + 1)));
-            cos = 1 - (square * cos / (i * (i - 1)));
+            sin = 1 - (square * sin * (Reciprocals[i] * Reciprocals[i + 1]));
+            cos = 1 - (square * cos * (Reciprocals[i] * Reciprocals[i - 1]));
         }
 
         sin *= r;

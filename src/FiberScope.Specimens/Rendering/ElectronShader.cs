@@ -81,7 +81,7 @@ internal sealed class ElectronShader
     }
 
     private float Body(int body, float u, float coarse) =>
-        _mat.Bodies[body].Brightness * (0.85f + (0.5f * (float)_look.RimHeight * (Secant(u) - 1)) + (0.12f * coarse));
+        _mat.Bodies[body].Brightness * (0.68f + (0.22f * u * u * u) + (0.5f * (float)_look.RimHeight * (Secant(u) - 1)) + (0.14f * coarse));
 
     private float Film(int film, float closeness, float coarse)
     {
@@ -101,7 +101,7 @@ internal sealed class ElectronShader
 
     private float[] Smooth(float[] heights, double sigma)
     {
-        var copy = heights.Select(h => Math.Max(0, h)).ToArray();
+        var copy = (float[])heights.Clone();
         Smoothing.Gaussian(copy, _mat.Scale.Width, _mat.Scale.Height, Math.Max(1.5, sigma));
         return copy;
     }

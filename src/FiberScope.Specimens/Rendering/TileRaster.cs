@@ -66,20 +66,16 @@ internal sealed class TileRaster(MatModel mat, SegmentSet set, SamplePattern pat
         var (tx, ty) = (b.X - a.X, b.Y - a.Y);
         var length = MathF.Sqrt((tx * tx) + (ty * ty));
         var (nx, ny) = (-ty / length, tx / length);
+        var bend = 1 + (segment.Reach * Math.Max(Turn(a, nx, ny), Turn(b, nx, ny)));
         var firstRow = Math.Max(_top, (int)MathF.Floor(Math.Min(a.Y, b.Y) - pad));
         var lastRow = Math.Min(_top + _height - 1, (int)MathF.Floor(Math.Max(a.Y, b.Y) + pad));
         for (var row = firstRow; row <= lastRow; row++)
         {
             var shift = lineShift[row];
             var (low, high) = (Math.Min(a.X, b.X) - pad, Math.Max(a.X, b.X) + pad);
-            if (Math.Abs(nx) > 0.05f)
-            {
-                // The ribbon's own extent on this line is narrower than its bounding box.
-                var centre = a.X - ((row + 0.5f - a.Y) * ny / nx);
-                var half = (pad / Math.Abs(nx)) + 1;
-                (low, high) = (Math.Max(low, centre - half), Math.Min(high, centre + half));
-            }
-
+            var y = row + 0.5f - a.Y;
+            (low, high) = Narrow(low, high, nx, a.X - (y * ny / nx), pad / Math.Abs(nx));
+            (low, high) = Narrow(low, high, ny, a.X + (((length / 2) - (y * -nx)) / ny), ((length / 2) + bend) / Math.Abs(ny));
             var firstColumn = Math.Max(_left, (int)MathF.Floor(low - shift));
             var lastColumn = Math.Min(_left + _width - 1, (int)MathF.Floor(high - shift));
             for (var column = firstColumn; column <= lastColumn; column++)
@@ -88,6 +84,12 @@ internal sealed class TileRaster(MatModel mat, SegmentSet set, SamplePattern pat
             }
         }
     }
+
+    /// <summary>The part of a line that lies in a slab: its centre on the line and half its width there; the slab's normal has the given x part.</summary>
+    private static (float Low, float High) Narrow(float low, float high, float normalX, float centre, float half) =>
+        Math.Abs(normalX) > 0.05f ? (Math.Max(low, centre - half - 1), Math.Min(high, centre + half + 1)) : (low, high);
+
+    private static float Turn(FibreNode node, float nx, float ny) => Math.Abs((node.TangentX * nx) + (node.TangentY * ny));
 
     private void DrawPixel(int index, in Segment segment, float nx, float ny, int column, int row, float shift)
     {
@@ -100,6 +102,11 @@ internal sealed class TileRaster(MatModel mat, SegmentSet set, SamplePattern pat
 
         var place = pattern.First(column, row);
         var sample = Sample(column, row);
+        if (_count > 1 && Buried(sample, Math.Max(a.Z, b.Z)))
+        {
+            return;
+        }
+
         for (var k = 0; k < _count; k++)
         {
             var (x, y) = (column + shift + pattern.X[place + k], row + pattern.Y[place + k]);
@@ -118,6 +125,18 @@ internal sealed class TileRaster(MatModel mat, SegmentSet set, SamplePattern pat
                 Put(sample + k, a.Z + (share * (b.Z - a.Z)), u, index);
             }
         }
+    }
+
+    /// <summary>Whether two surfaces already lie above a height at every sample of a pixel.</summary>
+    private bool Buried(int sample, float z)
+    {
+        var buried = true;
+        foreach (var second in Z2.AsSpan(sample, _count))
+        {
+            buried &= second >= z;
+        }
+
+        return buried;
     }
 
     private void DrawBody(int id, SolidBody body)
