@@ -120,11 +120,16 @@ public sealed record Characteristic
     public IQuantity Of(double number) => Quantity.From(number, Unit);
 
     /// <summary>A value for people, four significant digits and the unit, the same in every culture: <c>1.834 µm</c>.</summary>
-    public string Format(IQuantity quantity)
+    public string Format(IQuantity quantity) => Format(quantity, "G4");
+
+    /// <summary>An uncertainty for people, two significant digits and the unit.</summary>
+    public string FormatUncertainty(IQuantity quantity) => Format(quantity, "G2");
+
+    private string Format(IQuantity quantity, string digits)
     {
         var number = In(quantity);
         var text = number == 0 || (Math.Abs(number) >= 1e-3 && Math.Abs(number) < 1e5)
-            ? ((decimal)number).ToString("G4", CultureInfo.InvariantCulture)
+            ? ((decimal)number).ToString(digits, CultureInfo.InvariantCulture)
             : number.ToString("0.###E0", CultureInfo.InvariantCulture);
         return UnitText.Length == 0 ? text : $"{text} {UnitText}";
     }

@@ -42,7 +42,7 @@ public sealed record WayToDecide
         var fields = FieldsFor(limit, observed, now);
         var toWhat = outcome == Decision.Pass ? "a pass" : "a fail";
         var quantity = limit.Characteristic.Of(needed);
-        var text = $"Should the value stay, a standard uncertainty of {limit.Characteristic.Format(quantity)} or less (now {limit.Characteristic.Format(observed.StandardUncertainty)}) would make it {toWhat}";
+        var text = $"Should the value stay, a standard uncertainty of {limit.Characteristic.FormatUncertainty(quantity)} or less (now {limit.Characteristic.FormatUncertainty(observed.StandardUncertainty)}) would make it {toWhat}";
         var plan = (observed.Sampling, fields) switch
         {
             (null, _) => ".",

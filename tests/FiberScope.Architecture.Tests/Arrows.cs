@@ -23,6 +23,7 @@ internal static class Arrows
     public static readonly IReadOnlyDictionary<string, string[]> Homes = new Dictionary<string, string[]>(StringComparer.Ordinal)
     {
         ["OpenCvSharp4"] = ["Imaging"],
+        ["System.Numerics.Tensors"] = ["Imaging", "Filtration"],
         ["OpenCvSharp4.official.runtime.linux-x64"] = ["Imaging"],
         ["OpenCvSharp4.runtime.win"] = ["Imaging"],
         ["OpenCvSharp4.runtime.osx_arm64"] = ["Imaging"],
@@ -30,8 +31,7 @@ internal static class Arrows
         ["SixLabors.ImageSharp"] = ["Imaging", "Reports", "Specimens"],
         ["YamlDotNet"] = ["Assessment", "Specimens"],
         ["Microsoft.Extensions.FileSystemGlobbing"] = ["Assessment"],
-        ["ScottPlot"] = ["Reports"],
-        ["Fluid.Core"] = ["Reports"],
+        ["OxyPlot.Core"] = ["Reports"],
         ["System.CommandLine"] = ["Cli"],
         ["Spectre.Console"] = ["Cli"],
     };

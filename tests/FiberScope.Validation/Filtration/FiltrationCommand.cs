@@ -9,7 +9,17 @@ internal static class FiltrationCommand
     public static Command Create()
     {
         var command = new Command("filtration", "Compare the filtration model with the numerical cell solution and with measured media.");
-        command.SetAction(_ => 0);
+        var tabulate = new Option<bool>("--tabulate") { Description = "Solve the cell anew and rewrite the tables of the set 'cell' (minutes)." };
+        command.Add(tabulate);
+        command.SetAction(parsed =>
+        {
+            if (parsed.GetValue(tabulate))
+            {
+                CellTabulator.Write(Console.Out);
+            }
+
+            return 0;
+        });
         return command;
     }
 }

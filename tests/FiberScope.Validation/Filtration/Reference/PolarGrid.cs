@@ -3,7 +3,11 @@ namespace FiberScope.Validation.Filtration.Reference;
 /// <summary>Rings and sectors between the collision surface and the rim, with what flows and diffuses through their faces.</summary>
 internal sealed class PolarGrid
 {
+    /// <summary>Width of the sectors in the wake, relative to even ones.</summary>
+    private const double WakeSpacing = 0.06;
+
     private readonly double[] _faces;
+    private readonly double[] _angles;
     private readonly double[] _stream;
     private readonly double[] _conductance;
     private readonly double[] _sines;
@@ -17,15 +21,15 @@ internal sealed class PolarGrid
         var inner = 1 + ratio;
         _faces = Graded(inner, flow.Rim, LayerThickness(flow, peclet), rings);
         _stream = Array.ConvertAll(_faces, r => flow.Stream(r));
-        var step = Math.PI / sectors;
-        _sines = [.. Enumerable.Range(0, sectors + 1).Select(j => Math.Sin(j * step))];
+        _angles = [.. Enumerable.Range(0, sectors + 1).Select(j => Angle(j / (double)sectors))];
+        _sines = Array.ConvertAll(_angles, Math.Sin);
         _sines[sectors] = 0;
         _conductance = new double[rings + 1];
         for (var k = 0; k <= rings; k++)
         {
             var below = k == 0 ? inner : Centre(k - 1);
             var above = k == rings ? flow.Rim : Centre(k);
-            _conductance[k] = _diffusivity * step / Math.Log(above / below);
+            _conductance[k] = _diffusivity / Math.Log(above / below);
         }
     }
 
@@ -37,13 +41,20 @@ internal sealed class PolarGrid
     public double RadialFlow(int i, int j) => _stream[i + 1] * (_sines[j + 1] - _sines[j]);
 
     /// <summary>Diffusive conductance of the same face.</summary>
-    public double Conductance(int i) => _conductance[i + 1];
+    public double Conductance(int i, int j) => _conductance[i + 1] * (_angles[j + 1] - _angles[j]);
 
     /// <summary>Air from sector <paramref name="j"/> to the next in ring <paramref name="i"/>.</summary>
     public double SectorFlow(int i, int j) => -(_stream[i + 1] - _stream[i]) * _sines[j + 1];
 
-    /// <summary>Diffusive conductance between neighbouring sectors in ring <paramref name="i"/>.</summary>
-    public double SectorConductance(int i) => _diffusivity * Math.Log(_faces[i + 1] / _faces[i]) * Sectors / Math.PI;
+    /// <summary>Diffusive conductance between sector <paramref name="j"/> and the next in ring <paramref name="i"/>.</summary>
+    public double SectorConductance(int i, int j) =>
+        _diffusivity * Math.Log(_faces[i + 1] / _faces[i]) * 2 / (_angles[j + 2] - _angles[j]);
+
+    /// <summary>How much of the next sector's concentration stands at the face between sector <paramref name="j"/> and it.</summary>
+    public double NextShare(int j) => (_angles[j + 1] - _angles[j]) / (_angles[j + 2] - _angles[j]);
+
+    /// <summary>A smooth spacing, finer in the wake (θ near 0), whose depleted streak is thin at large Pe.</summary>
+    private static double Angle(double share) => Math.PI * share * (WakeSpacing + ((1 - WakeSpacing) * share));
 
     private double Centre(int i) => 0.5 * (_faces[i] + _faces[i + 1]);
 

@@ -1,0 +1,10 @@
+using FiberScope.Imaging.Tracing;
+
+namespace FiberScope.Imaging;
+
+/// <summary>Every setting of measuring one field; recorded with the result.</summary>
+public sealed record MeasurementSettings
+{
+    /// <summary>How fibres are found and read.</summary>
+    public TracingSettings Tracing { get; init; } = new();
+}

@@ -1,0 +1,151 @@
+namespace FiberScope.Imaging.Tracing;
+
+/// <summary>Finds the fibres of a picture and measures them.</summary>
+internal sealed class FibreTracer
+{
+    private readonly TracingSettings _settings;
+    private readonly StabilisedPicture _picture;
+    private readonly RibbonTracker[] _trackers;
+    private readonly double _widest;
+
+    public FibreTracer(StabilisedPicture picture, TracingSettings settings, double widest)
+    {
+        (_picture, _settings, _widest) = (picture, settings, widest);
+        _trackers = [.. picture.Levels.Select((level, l) => new RibbonTracker(level, l, picture.Noise[l], settings.InsideWeight))];
+        Judge = new RibbonJudge(settings, picture.LinearNoise);
+    }
+
+    public RibbonJudge Judge { get; }
+
+    /// <summary>The fibres, best evidence first; none of them claims another's ground.</summary>
+    public List<Ribbon> Run(CancellationToken cancellation)
+    {
+        var candidates = new List<Ribbon>();
+        var tried = new ClaimMap(_picture.Linear.Width, _picture.Linear.Height);
+        foreach (var seed in Seeds(cancellation))
+        {
+            cancellation.ThrowIfCancellationRequested();
+            if (Candidate(seed, tried) is { } ribbon)
+            {
+                candidates.Add(ribbon);
+            }
+        }
+
+        return Choose(candidates);
+    }
+
+    private List<Seed> Seeds(CancellationToken cancellation)
+    {
+        const float Widest = 13, NarrowestHigher = 5.6f;
+        var seeds = new List<Seed>();
+        for (var l = 0; l < _picture.Levels.Length; l++)
+        {
+            cancellation.ThrowIfCancellationRequested();
+            var map = EdgeMap.Of(_picture.Levels[l], _picture.Noise[l], _settings.SmoothingAlong, _settings.EdgeSignificance);
+            var narrowest = l == 0 ? (float)_settings.Narrowest : NarrowestHigher;
+            var last = l == _picture.Levels.Length - 1;
+            seeds.AddRange(SeedFinder.Find(map, l, narrowest, last ? 2 * Widest : Widest, _settings.InsideWeight, _settings.SeedSignificance));
+        }
+
+        return [.. seeds.OrderByDescending(s => s.Score * (1 + (0.1 * s.Level))).ThenBy(s => s.Level).ThenBy(s => s.Y).ThenBy(s => s.X)];
+    }
+
+    private Ribbon? Candidate(Seed seed, ClaimMap tried)
+    {
+        var scale = 1 << seed.Level;
+        var (x, y) = (((seed.X + 0.5) * scale) - 0.5, ((seed.Y + 0.5) * scale) - 0.5);
+        if (tried.Holds(x, y, seed.Normal, 0.25))
+        {
+            return null;
+        }
+
+        var track = _trackers[seed.Level].Follow(seed);
+        var width = 2 * Series.Median([.. track.Select(p => (double)p.HalfWidth)]);
+        foreach (var point in track)
+        {
+            tried.Take(point.X, point.Y, point.Normal, Math.Max(1, 0.2 * width), 2 * scale);
+        }
+
+        if (track.Count * scale < Math.Max(6, width) || width > _widest)
+        {
+            return null;
+        }
+
+        var rival = Rival(track, seed.Level, width);
+        return rival < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width) is { } strip ? Judge.Judge(strip, rival) : null;
+    }
+
+    /// <summary>The score of the best wider ribbon that shares one of the edges, over the track's own.</summary>
+    private double Rival(List<TrackPoint> track, int level, double width)
+    {
+        const int Stations = 7;
+        var shares = new List<double>();
+        for (var s = 0; s < Stations; s++)
+        {
+            var at = track[track.Count * ((2 * s) + 1) / (2 * Stations)];
+            var own = _trackers[level].Score(at.X, at.Y, at.Normal, at.HalfWidth);
+            if (own > 0)
+            {
+                shares.Add(Math.Max(Wider(at, width, 1), Wider(at, width, -1)) / own);
+            }
+        }
+
+        return shares.Count == 0 ? 1 : Series.Median([.. shares]);
+    }
+
+    private double Wider(TrackPoint at, double width, int side)
+    {
+        var (sin, cos) = Math.SinCos(at.Normal);
+        var (edgeX, edgeY) = (at.X + (side * at.HalfWidth * cos), at.Y + (side * at.HalfWidth * sin));
+        var best = 0.0;
+        for (var wide = 2.2 * width; wide < Math.Min(_widest, 14 * width); wide *= 1.15)
+        {
+            var level = 0;
+            while (level < _trackers.Length - 1 && wide / (1 << level) > 13)
+            {
+                level++;
+            }
+
+            var score = _trackers[level].Score(edgeX - (side * wide / 2 * cos), edgeY - (side * wide / 2 * sin), at.Normal, wide / 2);
+            best = Math.Max(best, score);
+        }
+
+        return best;
+    }
+
+    /// <summary>Takes candidates by their evidence, and refuses one whose ground is mostly taken in its direction.</summary>
+    private List<Ribbon> Choose(List<Ribbon> candidates)
+    {
+        var claims = new ClaimMap(_picture.Linear.Width, _picture.Linear.Height);
+        var chosen = new List<Ribbon>();
+        foreach (var ribbon in candidates.OrderByDescending(r => r.Evidence))
+        {
+            var strip = ribbon.Strip;
+            var (free, all) = (0, 0);
+            for (var r = 0; r < strip.Rows; r++)
+            {
+                if (ribbon.Accepted[r])
+                {
+                    all++;
+                    var taken = claims.Holds(strip.X[r], strip.Y[r], Math.Atan2(strip.Ny[r], strip.Nx[r]), 0.35);
+                    free += taken ? 0 : 1;
+                    ribbon.Accepted[r] = !taken;
+                }
+            }
+
+            if (free * strip.Step < Math.Max(8, 0.6 * ribbon.Width) || free < 0.5 * all)
+            {
+                continue;
+            }
+
+            for (var r = 0; r < strip.Rows; r++)
+            {
+                claims.Take(strip.X[r], strip.Y[r], Math.Atan2(strip.Ny[r], strip.Nx[r]), 0.5 * ribbon.Width, strip.Step);
+            }
+
+            chosen.Add(ribbon);
+        }
+
+        return chosen;
+    }
+}

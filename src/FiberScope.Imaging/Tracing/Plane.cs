@@ -1,0 +1,60 @@
+using System.Runtime.CompilerServices;
+using OpenCvSharp;
+
+namespace FiberScope.Imaging.Tracing;
+
+/// <summary>A grey picture in memory, sampled between its pixels; the centre of the first pixel is (0, 0) here.</summary>
+internal sealed class Plane
+{
+    public Plane(int width, int height)
+        : this(width, height, new float[width * height])
+    {
+    }
+
+    public Plane(int width, int height, float[] data)
+    {
+        Width = width;
+        Height = height;
+        Data = data;
+    }
+
+    public int Width { get; }
+
+    public int Height { get; }
+
+    public float[] Data { get; }
+
+    /// <summary>The value at (x, y) by straight-line interpolation; outside, that of the border.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public float Sample(float x, float y)
+    {
+        x = Math.Clamp(x, 0, Width - 1.001f);
+        y = Math.Clamp(y, 0, Height - 1.001f);
+        unchecked
+        {
+            int i = (int)x, j = (int)y;
+            float fx = x - i, fy = y - j;
+            var at = (j * Width) + i;
+            ref var first = ref Data[at];
+            var below = Unsafe.Add(ref first, Width);
+            var belowNext = Unsafe.Add(ref first, Width + 1);
+            var next = Unsafe.Add(ref first, 1);
+            var top = first + (fx * (next - first));
+            return top + (fy * (below + (fx * (belowNext - below)) - top));
+        }
+    }
+
+    /// <summary>A native copy; the caller disposes it.</summary>
+    public Mat ToMat()
+    {
+        using var view = Mat.FromPixelData(Height, Width, MatType.CV_32FC1, Data);
+        return view.Clone();
+    }
+
+    public static Plane FromMat(Mat native)
+    {
+        var plane = new Plane(native.Cols, native.Rows);
+        System.Runtime.InteropServices.Marshal.Copy(native.Data, plane.Data, 0, plane.Data.Length);
+        return plane;
+    }
+}

@@ -1,0 +1,18 @@
+namespace FiberScope.Imaging.Tracing;
+
+/// <summary>A measured candidate: its strip, which rows were accepted, and how good it is.</summary>
+internal sealed class Ribbon(RibbonStrip strip, bool[] accepted, double[] widths, double evidence)
+{
+    public RibbonStrip Strip { get; } = strip;
+
+    /// <summary>For each row whether it gives a reading.</summary>
+    public bool[] Accepted { get; } = accepted;
+
+    /// <summary>For each row the width between the edges, running median where accepted; pixels.</summary>
+    public double[] Widths { get; } = widths;
+
+    /// <summary>How much speaks for the ribbon: contrast times the root of its accepted length over its width.</summary>
+    public double Evidence { get; } = evidence;
+
+    public double Width { get; } = Series.Median([.. widths.Where((_, r) => accepted[r])]);
+}

@@ -1,0 +1,85 @@
+namespace FiberScope.Imaging.Tracing;
+
+/// <summary>Decides where a straightened fibre may be read, and whether it is one fibre at all.</summary>
+internal sealed class RibbonJudge(TracingSettings settings, double noise)
+{
+    private readonly SortedDictionary<string, int> _refused = new(StringComparer.Ordinal);
+
+    /// <summary>How many stations were refused, by reason.</summary>
+    public IReadOnlyDictionary<string, int> Refused => _refused;
+
+    public Ribbon? Judge(RibbonStrip strip, double rival)
+    {
+        var rows = strip.Rows;
+        var width = 2 * Series.Median([.. Enumerable.Range(0, rows).Select(r => strip.Half[r])]);
+        var looks = StripLook.Of(strip, width, noise);
+        var accepted = new bool[rows];
+        for (var r = 0; r < rows; r++)
+        {
+            var reason = Reason(strip, looks, r, width);
+            accepted[r] = reason is null;
+            Count(reason);
+        }
+
+        var least = Math.Max(7, 0.6 * width) / strip.Step;
+        Runs.Keep(accepted, (int)(0.5 * width / strip.Step), least);
+        var widths = new double[rows];
+        for (var r = 0; r < rows; r++)
+        {
+            widths[r] = strip.Left.Offset[r] + strip.Right.Offset[r];
+        }
+
+        var median = Runs.Median(widths, accepted, 3 * width / strip.Step);
+        for (var r = 0; r < rows; r++)
+        {
+            if (accepted[r] && Math.Abs(widths[r] - median[r]) > (settings.LargestStep * median[r]) + 0.4)
+            {
+                accepted[r] = false;
+                Count("uneven-width");
+            }
+        }
+
+        Runs.Keep(accepted, (int)(0.5 * width / strip.Step), least);
+        return Whole(strip, looks, accepted, widths, width, rival);
+    }
+
+    private Ribbon? Whole(RibbonStrip strip, StripLook looks, bool[] accepted, double[] widths, double width, double rival)
+    {
+        var count = accepted.Count(a => a);
+        var length = count * strip.Step;
+        var share = count / (double)accepted.Length;
+        var why = length < Math.Max(12, width) ? "too-short"
+            : share < settings.LeastAccepted ? "mostly-hidden"
+            : rival + Math.Abs(Series.Median([.. looks.Asymmetry.Where((_, r) => accepted[r])])) + 1 - share > 0.95 ? "rim-or-gap"
+            : Series.Spread([.. widths.Where((_, r) => accepted[r])]) > 0.25 ? "uneven-width"
+            : null;
+        if (why is not null)
+        {
+            _refused[why] = _refused.GetValueOrDefault(why) + Math.Max(1, count);
+            return null;
+        }
+
+        var contrast = Series.Median([.. Enumerable.Range(0, accepted.Length).Where(r => accepted[r]).Select(r => Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]))]);
+        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast * Math.Sqrt(length) * (1 - (0.5 * rival)));
+    }
+
+    private string? Reason(RibbonStrip strip, StripLook looks, int r, double width)
+    {
+        var (low, high) = (Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]), Math.Max(looks.ContrastLeft[r], looks.ContrastRight[r]));
+        var found = strip.Left.Offset[r] + strip.Right.Offset[r];
+        return !strip.Left.Found[r] || !strip.Right.Found[r] || found < 1.5 ? "no-edge"
+            : low < settings.LeastFlankRatio * high || low < settings.FlankSignificance * noise / Math.Max(1, 0.3 * width) ? "one-edge-hidden"
+            : Math.Abs(strip.Right.Offset[r] - strip.Left.Offset[r]) > 0.4 * found ? "off-centre"
+            : looks.Swing[r] >= settings.LargestSwing ? "edge-inside"
+            : looks.Middle[r] - looks.Outside[r] <= settings.LeastSolid * Math.Max(looks.Peak[r] - looks.Outside[r], 1e-6) ? "dark-middle"
+            : null;
+    }
+
+    private void Count(string? reason)
+    {
+        if (reason is not null)
+        {
+            _refused[reason] = _refused.GetValueOrDefault(reason) + 1;
+        }
+    }
+}

@@ -1,0 +1,30 @@
+using FiberScope.Filtration;
+using FiberScope.Reports.Html;
+
+namespace FiberScope.Reports.Figures;
+
+/// <summary>What each mechanism alone would let through, against particle size.</summary>
+/// <remarks>
+/// A mechanism that brings the share s of −ln P would by itself let through P to the power s: penetrations of mechanisms multiply.
+/// </remarks>
+internal static class MechanismFigure
+{
+    private const double LeastShare = 0.005;
+
+    public static SvgFigure Draw(MediaForecast forecast)
+    {
+        var curve = forecast.Curve;
+        string[] mechanisms = [.. curve.SelectMany(p => p.ByMechanism.Where(m => m.Value >= LeastShare).Select(m => m.Key)).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
+        var axis = PenetrationAxis.For(curve.Select(p => p.Penetration * 100).Append(100));
+        var model = FigureStyle.Plot(PenetrationFigure.ParticleAxis(curve), axis.Drawn("penetration (%)"));
+        model.Series.Add(FigureStyle.Line("all together", curve.Select(p => (p.Particle.Micrometers, axis.Clip(p.Penetration * 100))), FigureStyle.Ink, 3));
+        foreach (var (mechanism, i) in mechanisms.Select((m, i) => (m, i)))
+        {
+            var style = FigureStyle.Dashes[(i + 1) % FigureStyle.Dashes.Length];
+            var points = curve.Select(p => (p.Particle.Micrometers, axis.Clip(100 * Math.Pow(p.Penetration, p.ByMechanism.GetValueOrDefault(mechanism)))));
+            model.Series.Add(FigureStyle.Line(Wording.Words(mechanism) + " alone", points, FigureStyle.Series[(i + 1) % FigureStyle.Series.Length], 1.8, style));
+        }
+
+        return SvgFigure.Draw(model, "mechanisms", "Penetration that each mechanism alone would give, against particle size.", height: 390);
+    }
+}

@@ -1,0 +1,62 @@
+using System.Text;
+using FiberScope.Assessment;
+using FiberScope.Reports.Html;
+using FiberScope.Reports.Sections;
+
+namespace FiberScope.Reports;
+
+/// <summary>Writes an assessment as one HTML file that opens without a network, prints on A4 and reads on a telephone.</summary>
+/// <remarks>
+/// No scripts, no fonts, nothing loaded from anywhere: figures are inline SVG, pictures inline JPEG. The same assessment gives the
+/// same bytes in every culture and on every machine.
+/// </remarks>
+public sealed class HtmlReport : IReportWriter
+{
+    private static readonly IReportSection[] Sections =
+    [
+        new SummarySection(), new CaveatSection(), new DiameterSection(), new SoliditySection(), new ForecastSection(),
+        new FieldSection(), new RecordSection(),
+    ];
+
+    /// <inheritdoc/>
+    public string FileName => "report.html";
+
+    /// <inheritdoc/>
+    public void Write(SwatchAssessment assessment, Stream destination, CancellationToken cancellation)
+    {
+        ArgumentNullException.ThrowIfNull(assessment);
+        ArgumentNullException.ThrowIfNull(destination);
+        using var writer = new StreamWriter(destination, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false), leaveOpen: true) { NewLine = "\n" };
+        writer.Write(Markup.Of(
+            $"""
+            <!doctype html>
+            <html lang="en">
+            <head>
+            <meta charset="utf-8">
+            <meta name="viewport" content="width=device-width, initial-scale=1">
+            <meta name="generator" content="{assessment.Recipe.Software}">
+            <meta http-equiv="Content-Security-Policy" content="default-src 'none'; img-src data:; style-src 'unsafe-inline'">
+            <title>{assessment.Identity.Title} – swatch assessment</title>
+            <style>{Stylesheet.Report}</style>
+            </head>
+            <body>
+            <main>
+
+            """));
+        foreach (var section in Sections)
+        {
+            cancellation.ThrowIfCancellationRequested();
+            var content = section.Render(assessment);
+            if (!content.IsEmpty)
+            {
+                writer.Write(Framed(section, content));
+            }
+        }
+
+        writer.Write("</main>\n</body>\n</html>\n");
+    }
+
+    private static Markup Framed(IReportSection section, Markup content) => section.Heading.Length == 0
+        ? Markup.Of($"<section id=\"{section.Anchor}\">\n{content}\n</section>\n")
+        : Markup.Of($"<section id=\"{section.Anchor}\">\n<h2>{section.Heading}</h2>\n{content}\n</section>\n");
+}

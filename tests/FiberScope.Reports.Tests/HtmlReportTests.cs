@@ -1,0 +1,145 @@
+using System.Globalization;
+using System.Text;
+using System.Text.RegularExpressions;
+using System.Xml.Linq;
+using FiberScope.Assessment;
+
+namespace FiberScope.Reports.Tests;
+
+public sealed partial class HtmlReportTests
+{
+    private static readonly Lazy<string> Page = new(() => Written(Invented.Assessment()));
+
+    [Fact]
+    public void Every_figure_stands_on_the_page()
+    {
+        Assert.Contains("id=\"summary\"", Page.Value, StringComparison.Ordinal);
+        string[] figures = ["Histogram of fibre diameters", "Forecast penetration against", "Penetration that each mechanism", "Forecast pressure drop", "Forecast quality factor", "Forecast most-penetrating particle size", "Forecast penetration at the most"];
+        Assert.All(figures, figure => Assert.Contains($"aria-label=\"{figure}", Page.Value, StringComparison.Ordinal));
+        Assert.Equal(5, Fields().Count(Page.Value));
+    }
+
+    [Theory]
+    [InlineData("length-weighted")]
+    [InlineData("number-weighted")]
+    [InlineData("geometric mean")]
+    [InlineData("D10")]
+    [InlineData("spread of the published models")]
+    [InlineData("95 % band of the measured inputs")]
+    [InlineData("MPPS 0.")]
+    [InlineData("air permeability at")]
+    [InlineData("125 Pa")]
+    [InlineData("200 Pa")]
+    [InlineData("How many more fields")]
+    [InlineData("Uncertainty of the mean")]
+    [InlineData("only the standard's own test decides")]
+    [InlineData("bbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbbb")]
+    [InlineData("aaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaa")]
+    [InlineData("the picture is out of focus.")]
+    [InlineData("bootstrap seed")]
+    public void The_page_says(string text) =>
+        Assert.Contains(text, System.Net.WebUtility.HtmlDecode(Page.Value), StringComparison.Ordinal);
+
+    [Fact]
+    public void The_cautions_are_on_the_first_page()
+    {
+        var first = Page.Value[..Page.Value.IndexOf("</section>", StringComparison.Ordinal)];
+        Assert.All(Cautions.All, caution => Assert.Contains(caution, System.Net.WebUtility.HtmlDecode(first), StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Nothing_is_loaded_from_anywhere_and_nothing_runs()
+    {
+        Assert.DoesNotContain("<script", Page.Value, StringComparison.OrdinalIgnoreCase);
+        Assert.DoesNotContain("@import", Page.Value, StringComparison.OrdinalIgnoreCase);
+        Assert.All(References().Matches(Page.Value), match => Assert.StartsWith("data:image/jpeg;base64,", match.Groups["to"].Value, StringComparison.Ordinal));
+        Assert.DoesNotContain("url(http", Page.Value, StringComparison.OrdinalIgnoreCase);
+    }
+
+    [Fact]
+    public void What_a_user_wrote_is_shown_and_never_run()
+    {
+        var page = Written(Invented.Assessment("<script>alert(1)</script>\" onload=\"x"));
+        Assert.DoesNotContain("<script", page, StringComparison.OrdinalIgnoreCase);
+        Assert.DoesNotContain("\" onload=\"", page, StringComparison.Ordinal);
+        Assert.Contains("&lt;script&gt;alert(1)&lt;/script&gt;", page, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_German_machine_writes_the_same_bytes()
+    {
+        var before = CultureInfo.CurrentCulture;
+        try
+        {
+            CultureInfo.CurrentCulture = CultureInfo.GetCultureInfo("de-DE");
+            Assert.Equal(Page.Value, Written(Invented.Assessment()));
+        }
+        finally
+        {
+            CultureInfo.CurrentCulture = before;
+        }
+    }
+
+    [Fact]
+    public void Every_element_is_closed_and_every_name_is_used_once()
+    {
+        var body = Page.Value[Page.Value.IndexOf("<main>", StringComparison.Ordinal)..(Page.Value.IndexOf("</main>", StringComparison.Ordinal) + 7)];
+        var tree = XElement.Parse(body.Replace("<br>", "<br/>", StringComparison.Ordinal));
+        string[] names = [.. tree.Descendants().Select(e => (string?)e.Attribute("id")).OfType<string>()];
+        Assert.Equal(names.Length, names.Distinct(StringComparer.Ordinal).Count());
+    }
+
+    [Fact]
+    public void Text_of_the_figures_is_text_in_a_face_that_every_machine_has()
+    {
+        Assert.Matches(FigureText(), Page.Value);
+        Assert.DoesNotContain("font-family=", Page.Value, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Many_fields_keep_the_page_small_enough_to_mail()
+    {
+        var page = Written(Invented.Assessment(fields: 20));
+        Assert.InRange(Encoding.UTF8.GetByteCount(page), 1, 6_000_000);
+    }
+
+    [Fact]
+    public void A_swatch_without_forecast_grade_or_solidity_still_reports()
+    {
+        var full = Invented.Assessment();
+        var bare = full with
+        {
+            Forecast = null,
+            Verdict = null,
+            VelocitySweep = [],
+            AirPermeabilities = [],
+            RigPoints = [],
+            Layers = [full.Layers[0] with { Solidity = null }],
+        };
+        var page = Written(bare);
+        Assert.Contains("No grade was given", page, StringComparison.Ordinal);
+        Assert.Contains("No forecast: it needs", page, StringComparison.Ordinal);
+    }
+
+    private static string Written(SwatchAssessment assessment)
+    {
+        using var stream = new MemoryStream();
+        new HtmlReport().Write(assessment, stream, TestContext.Current.CancellationToken);
+        var keep = Environment.GetEnvironmentVariable("FIBERSCOPE_KEEP_REPORT");
+        if (keep is not null)
+        {
+            File.WriteAllBytes(keep, stream.ToArray());
+        }
+
+        return Encoding.UTF8.GetString(stream.ToArray());
+    }
+
+    [GeneratedRegex("<svg class=\"field\"", RegexOptions.ExplicitCapture, 5000)]
+    private static partial Regex Fields();
+
+    [GeneratedRegex("(src|href)=\"(?<to>[^\"]{0,40})", RegexOptions.ExplicitCapture, 5000)]
+    private static partial Regex References();
+
+    [GeneratedRegex("<text[^>]*>penetration \\(%\\)</text>", RegexOptions.ExplicitCapture, 5000)]
+    private static partial Regex FigureText();
+}
