@@ -20,7 +20,7 @@ internal static class OmeScale
         try
         {
             using var reader = XmlReader.Create(
-                new StringReader(text[text.IndexOf('<', StringComparison.Ordinal)..].TrimEnd('\0', ' ', '\n', '\r')),
+                new StringReader(Markup(text)),
                 new XmlReaderSettings { DtdProcessing = DtdProcessing.Prohibit, XmlResolver = null });
             document = XDocument.Load(reader);
         }
@@ -33,6 +33,10 @@ internal static class OmeScale
         var one = pixels.FirstOrDefault(element => Holds(element, page)) ?? pixels.FirstOrDefault();
         return one is null ? null : FromPixels(one);
     }
+
+    /// <summary>The text from its first to its last angle bracket: other tags' text may follow.</summary>
+    private static string Markup(string text) =>
+        text[text.IndexOf('<', StringComparison.Ordinal)..(text.LastIndexOf('>') + 1)];
 
     private static ScaleClue? FromPixels(XElement pixels)
     {

@@ -65,8 +65,8 @@ internal static partial class TextScale
     private static char? Axis(string key) => string.Concat(key.Split('.')[^1].Where(char.IsLetter)).ToUpperInvariant() switch
     {
         "PIXELSIZE" or "IMAGEPIXELSIZE" or "PIXELSPACING" or "PIXELPITCH" or "PHYSICALPIXELSIZE" or "SIZEOFPIXEL" or "SIZEOFAPIXEL" => 'b',
-        "PIXELSIZEX" or "PIXELWIDTH" or "XPIXELSIZE" or "PHYSICALSIZEX" or "PIXELSPACINGX" or "PIXELXSIZE" or "PIXELSIZEWIDTH" => 'x',
-        "PIXELSIZEY" or "PIXELHEIGHT" or "YPIXELSIZE" or "PHYSICALSIZEY" or "PIXELSPACINGY" or "PIXELYSIZE" or "PIXELSIZEHEIGHT" => 'y',
+        "PIXELSIZEX" or "PIXELWIDTH" or "XPIXELSIZE" or "PIXELSPACINGX" or "PIXELXSIZE" or "PIXELSIZEWIDTH" => 'x',
+        "PIXELSIZEY" or "PIXELHEIGHT" or "YPIXELSIZE" or "PIXELSPACINGY" or "PIXELYSIZE" or "PIXELSIZEHEIGHT" => 'y',
         _ => null,
     };
 

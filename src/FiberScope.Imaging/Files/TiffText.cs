@@ -20,7 +20,7 @@ internal static class TiffText
         for (var i = 0; i < tiff.GetTagListCount(); i++)
         {
             var tag = (TiffTag)tiff.GetTagListEntry(i);
-            if (tiff.GetField(tag) is { Length: > 0 } values)
+            if (tag != TiffTag.IMAGEDESCRIPTION && tiff.GetField(tag) is { Length: > 0 } values)
             {
                 text.AppendLine(AsText(values[^1]));
             }
