@@ -14,7 +14,7 @@ public sealed partial class HtmlReportTests
     public void Every_figure_stands_on_the_page()
     {
         Assert.Contains("id=\"summary\"", Page.Value, StringComparison.Ordinal);
-        string[] figures = ["Histogram of fibre diameters", "Forecast penetration against", "Penetration that each mechanism", "Forecast pressure drop", "Forecast quality factor", "Forecast most-penetrating particle size", "Forecast penetration at the most"];
+        string[] figures = ["Histogram of fibre diameters", "Mean, median and D10 to D90", "Forecast penetration against", "Penetration that each mechanism", "Forecast pressure drop", "Forecast quality factor", "Forecast most-penetrating particle size", "Forecast penetration at the most"];
         Assert.All(figures, figure => Assert.Contains($"aria-label=\"{figure}", Page.Value, StringComparison.Ordinal));
         Assert.Equal(5, Fields().Count(Page.Value));
     }

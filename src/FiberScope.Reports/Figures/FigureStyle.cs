@@ -70,7 +70,7 @@ internal static class FigureStyle
             LegendItemSpacing = 26,
             LegendSymbolLength = 24,
             LegendLineSpacing = 3,
-            LegendPadding = 2,
+            LegendPadding = 5,
             LegendMargin = 2,
         });
         return model;

@@ -33,6 +33,7 @@ internal sealed class DiameterSection : IReportSection
             <figure>{Markup.OfSvg(DiameterFigure.Draw(survey, scale, id))}<figcaption>Length-weighted: every micrometre of fibre counts the same, as it does for filtration. {Shape(survey, scale)}</figcaption></figure>
             {Statistics(survey, scale)}
             <p class="fine">Length-weighted figures weigh each reading by the visible length of fibre it stands for. Number-weighted figures count each trace once; a long fibre can show as several traces. Intervals come from the differences between fields and fibres, not from the count of readings.</p>
+            {Fields(survey, scale, id + "-fields")}
             <div class="pair"><div>{Budget(survey, scale)}</div><div>{Plan(survey)}</div></div>
             """);
     }
@@ -54,6 +55,11 @@ internal sealed class DiameterSection : IReportSection
 
         string Range(LengthInterval interval) => $"{scale.Number(interval.Low)} to {scale.Number(interval.High)}";
     }
+
+    private static Markup Fields(DiameterSurvey survey, DiameterScale scale, string id) =>
+        FieldSpreadFigure.Draw(survey, scale, id) is { } figure
+            ? Markup.Of($"<figure>{Markup.OfSvg(figure)}<figcaption>Field by field, length-weighted. A field that stands apart from the others deserves a second look at its picture.</figcaption></figure>")
+            : Markup.Empty;
 
     private static string Shape(DiameterSurvey survey, DiameterScale scale)
     {

@@ -2,14 +2,13 @@ using FiberScope.Assessment;
 using FiberScope.Filtration;
 using FiberScope.Reports.Figures;
 using FiberScope.Reports.Html;
-using FiberScope.Statistics;
 
 namespace FiberScope.Reports.Sections;
 
 /// <summary>What to expect on a rig: the penetration curve and its parts, and how all moves with face velocity.</summary>
 internal sealed class ForecastSection : IReportSection
 {
-    private const int MostRows = 16;
+    private const int MostRows = 12;
 
     /// <inheritdoc/>
     public string Anchor => "forecast";
@@ -38,12 +37,11 @@ internal sealed class ForecastSection : IReportSection
             """);
     }
 
-    /// <summary>The lowest and highest penetration of the models where penetration is largest.</summary>
-    internal static (double Low, double High) ModelBandAtMpps(MediaForecast forecast)
+    /// <summary>The point of the curve where penetration is largest, for its bands.</summary>
+    internal static CurvePoint AtMpps(MediaForecast forecast)
     {
         var size = forecast.MostPenetratingSize?.Meters ?? forecast.Curve.MaxBy(p => p.Penetration)!.Particle.Meters;
-        var nearest = forecast.Curve.MinBy(p => Math.Abs(Math.Log(p.Particle.Meters / size)))!;
-        return (nearest.ModelBand.Low, nearest.ModelBand.High);
+        return forecast.Curve.MinBy(p => Math.Abs(Math.Log(p.Particle.Meters / size)))!;
     }
 
     private static string Air(MediaForecast forecast)
@@ -54,13 +52,13 @@ internal sealed class ForecastSection : IReportSection
 
     private static Markup Key(MediaForecast forecast)
     {
-        var (low, high) = ModelBandAtMpps(forecast);
-        return new Table("figures", "forecast", "value", "spread of the models")
-            .Row("pressure drop", Wording.Of(forecast.PressureDrop), "")
-            .Row("most-penetrating particle size (MPPS)", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none between 10 nm and 2 µm", "")
-            .Row("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), Wording.Percent(new Interval(low, high)))
-            .Row("efficiency at the MPPS", Wording.Percent(1 - forecast.PenetrationAtMostPenetratingSize, 4), "")
-            .Row("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} per kPa", "")
+        var worst = AtMpps(forecast);
+        return new Table("figures", "forecast", "value", "measured inputs, 95 %", "spread of the models")
+            .Row("pressure drop", Wording.Of(forecast.PressureDrop), "", "")
+            .Row("most-penetrating particle size (MPPS)", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none between 10 nm and 2 µm", "", "")
+            .Row("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), worst.MeasurementBand is { } band ? Wording.Percent(band) : "–", Wording.Percent(worst.ModelBand))
+            .Row("efficiency at the MPPS", Wording.Percent(1 - forecast.PenetrationAtMostPenetratingSize, 4), "", "")
+            .Row("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} per kPa", "", "")
             .Finish();
     }
 

@@ -25,6 +25,7 @@ internal sealed class SummarySection : IReportSection
         <div class="keys">{assessment.Layers.Select(layer => Measured(layer, assessment.Layers.Length > 1))}{Forecast(assessment)}</div>
         {Limits(assessment.Verdict)}
         {Basis(assessment)}
+        <p class="signoff"><span>Checked by</span><span>Date</span><span>Signature</span></p>
         <ul class="cautions">{Cautions.All.Select(caution => Markup.Of($"<li>{caution}</li>"))}</ul>
         """);
 
@@ -78,11 +79,12 @@ internal sealed class SummarySection : IReportSection
         }
 
         var at = $"forecast at {Wording.Of(forecast.OperatingPoint.FaceVelocity)}";
-        var (low, high) = ForecastSection.ModelBandAtMpps(forecast);
+        var worst = ForecastSection.AtMpps(forecast);
+        var inputs = worst.MeasurementBand is { } band ? $"inputs, 95 %: {Wording.Percent(band, 2)}; " : "";
         return Markup.Of(
             $"""
             {Key("pressure drop", Wording.Of(forecast.PressureDrop), "", at)}
-            {Key("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), $"models: {Wording.Percent(new Statistics.Interval(low, high), 2)}", at)}
+            {Key("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), $"{inputs}models: {Wording.Percent(worst.ModelBand, 2)}", at)}
             {Key("most-penetrating size", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none in range", "", at)}
             {Key("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} /kPa", "", at)}
             """);
