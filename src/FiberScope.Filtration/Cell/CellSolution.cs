@@ -11,6 +11,18 @@ namespace FiberScope.Filtration.Cell;
 /// </remarks>
 public sealed class CellSolution
 {
+    /// <summary>
+    /// Milne length of an absorbing wall in particle free paths √(D τ), −ζ(½); Marshall and Watson (1985), J. Phys. A 18,
+    /// 3531 (from memory).
+    /// </summary>
+    private const double MilneLength = 1.46035;
+
+    /// <summary>Scaled Stokes number at which half of the diffusive reach still counts; fitted to the stochastic reference.</summary>
+    private const double CrossingStokes = 0.41;
+
+    /// <summary>How fast that share falls; fitted to the stochastic reference.</summary>
+    private const double CrossingExponent = 1.5;
+
     private readonly CellSurface _diffusion;
     private readonly CellSurface _impaction;
 
@@ -28,7 +40,12 @@ public sealed class CellSolution
     /// <summary>The air's flow.</summary>
     public KuwabaraFlow Flow { get; }
 
-    /// <summary>Stokes number at which inertia alone begins to collect point particles, near y = 0.54 for all solidities.</summary>
+    /// <summary>
+    /// Stk (0.8288 × drag)^0.8: the Stokes number scaled by the flow, so that inertia alone begins to collect point particles
+    /// near 0.54 at every solidity.
+    /// </summary>
+    /// <param name="flow">The air's flow.</param>
+    /// <param name="stokes">Stk = ρp dp² Cc U / (18 μ df); dimensionless, 0 or above.</param>
     public static double ScaledStokes(KuwabaraFlow flow, double stokes) => stokes * Math.Pow(0.8288 * flow.Drag, 0.8);
 
     /// <summary>How much of the room between fibre and rim a particle's radius takes.</summary>
@@ -75,9 +92,11 @@ public sealed class CellSolution
 
     /// <summary>Diffusion, interception and inertia together.</summary>
     /// <remarks>
-    /// What diffusion and inertia add to interception is joined as the root of the sum of squares: both draw on the same
-    /// air near the axis, so their plain sum is too high. Exact when either vanishes; against particles followed with
-    /// both at once the rule's limits are in the validation document.
+    /// Diffusion is taken as a larger reach: R* is the interception parameter that would collect by interception alone what
+    /// diffusion and interception collect without inertia. Inertia acts on R* while particles follow the air, and on R when
+    /// they cross it so fast that diffusion brings in as many as it takes away; between them the share of R* falls with the
+    /// scaled Stokes number. Exact when diffusion or inertia vanishes. The two constants of that share are fitted to
+    /// particles followed with both at once; how well they do at other points is in the validation document.
     /// </remarks>
     /// <param name="peclet">Pe = U df / D; dimensionless, above zero; infinity means no diffusion.</param>
     /// <param name="ratio">R = dp / df; dimensionless, 0 or above.</param>
@@ -86,10 +105,29 @@ public sealed class CellSolution
     /// <exception cref="ArgumentOutOfRangeException">An argument is out of its range.</exception>
     public double Efficiency(double peclet, double ratio, double stokes)
     {
+        var slow = DiffusionInterception(peclet, ratio);
+        if (stokes == 0)
+        {
+            return slow;
+        }
+
+        var fast = ImpactionInterception(ratio, stokes);
+        if (double.IsPositiveInfinity(peclet) || ratio >= Flow.Rim - 1)
+        {
+            return fast;
+        }
+
+        var reach = Flow.ReachOf(WithKineticLayer(slow, peclet, ratio, stokes), ratio);
+        var following = 1 / (1 + Math.Pow(ScaledStokes(Flow, stokes) / CrossingStokes, CrossingExponent));
+        return Math.Clamp(fast + (following * (ImpactionInterception(reach, stokes) - fast)), 0, Flow.Rim);
+    }
+
+    /// <summary>Diffusion slowed by the layer, a particle's own free path deep, in which it cannot be told from free flight.</summary>
+    private double WithKineticLayer(double slow, double peclet, double ratio, double stokes)
+    {
         var interception = Flow.Interception(ratio);
-        var byDiffusion = DiffusionInterception(peclet, ratio) - interception;
-        var byInertia = ImpactionInterception(ratio, stokes) - interception;
-        var added = byInertia > 0 ? Math.Sqrt((byDiffusion * byDiffusion) + (byInertia * byInertia)) : byDiffusion + byInertia;
-        return Math.Min(interception + added, Flow.Rim);
+        var diffusive = slow - interception;
+        var depth = MilneLength * Math.Sqrt(4 * stokes / peclet);
+        return interception + (diffusive / (1 + (depth * peclet * diffusive / (2 * Math.PI * (1 + ratio)))));
     }
 }

@@ -78,4 +78,32 @@ public sealed class KuwabaraFlow
         var radius = 1 + Require.NotNegative(ratio);
         return radius >= Rim ? Rim : Stream(radius);
     }
+
+    /// <summary>The interception parameter at which interception alone collects a given efficiency: the inverse of <see cref="Interception"/>.</summary>
+    /// <param name="efficiency">E, from 0 to α^−½.</param>
+    /// <param name="atLeast">Where the answer is known to lie above; dimensionless, 0 or above.</param>
+    public double ReachOf(double efficiency, double atLeast)
+    {
+        var (low, high) = (1 + atLeast, Rim);
+        // F = F′(1) x + ½ F″(1) x² + … close to the surface.
+        var guess = (Math.Sqrt((SurfaceSpeed * SurfaceSpeed) + (4 * HalfCurvature * efficiency)) - SurfaceSpeed) / (2 * HalfCurvature);
+        var radius = Math.Clamp(1 + guess, low, high);
+        for (var step = 0; step < 60 && high - low > 1e-9; step++)
+        {
+            var excess = Stream(radius) - efficiency;
+            (low, high) = excess > 0 ? (low, radius) : (radius, high);
+            // Newton where it stays inside the bracket, else halving; F is rising and convex near the surface.
+            var slope = _a - (_b / (radius * radius)) + (3 * _c * radius * radius) + (_d * (Math.Log(radius) + 1));
+            var next = radius - (excess / slope);
+            next = next > low && next < high ? next : 0.5 * (low + high);
+            if (Math.Abs(next - radius) < 1e-8)
+            {
+                return next - 1;
+            }
+
+            radius = next;
+        }
+
+        return radius - 1;
+    }
 }
