@@ -31,4 +31,7 @@ public sealed record AirState
 
     /// <summary>Relative humidity; dimensionless, 0 to 1.</summary>
     public double RelativeHumidity { get; }
+
+    /// <summary>Viscosity, mean free path and density in this state.</summary>
+    public AirProperties Properties => AirProperties.Of(this);
 }

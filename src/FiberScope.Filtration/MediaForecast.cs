@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using FiberScope.Fibres;
+using FiberScope.Statistics;
 using UnitsNet;
 
 namespace FiberScope.Filtration;
@@ -15,6 +16,9 @@ public sealed record MediaForecast
 
     /// <summary>Pressure drop across all layers.</summary>
     public required Pressure PressureDrop { get; init; }
+
+    /// <summary>Lowest and highest pressure drop by the published sets, Pa.</summary>
+    public Interval? PressureDropModelBandPascals { get; init; }
 
     /// <summary>Penetration against particle size, smallest particle first.</summary>
     public required ImmutableArray<CurvePoint> Curve { get; init; }

@@ -1,4 +1,5 @@
 using FiberScope.Fibres;
+using FiberScope.Statistics;
 using UnitsNet;
 
 namespace FiberScope.Filtration;
@@ -17,4 +18,10 @@ public sealed record MediaLayer
 
     /// <summary>The layer's thickness; above zero.</summary>
     public required Length Thickness { get; init; }
+
+    /// <summary>
+    /// How uneven the mat is: the fan model's drag over the mat's own, ε; above zero, usually 1 to 2.2. Null takes the ε that turns the fan
+    /// model into Davies' law for real pads. It divides drag and non-inertial efficiency alike in every correlation set.
+    /// </summary>
+    public double? InhomogeneityFactor { get; init => field = value is { } given ? Require.Positive(given, nameof(InhomogeneityFactor)) : null; }
 }

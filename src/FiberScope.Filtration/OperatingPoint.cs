@@ -17,4 +17,7 @@ public sealed record OperatingPoint
 
     /// <summary>The particle diameters (physical, sphere) of the curve; empty asks for the usual range, 10 nm to 10 µm.</summary>
     public ImmutableArray<Length> Particles { get; init; } = [];
+
+    /// <summary>Which way the air flows; across unless told otherwise.</summary>
+    public FlowDirection Direction { get; init; } = FlowDirection.Horizontal;
 }
