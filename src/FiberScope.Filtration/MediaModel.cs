@@ -32,7 +32,7 @@ public static class MediaModel
         Check(layers, point);
         settings ??= new ForecastSettings();
         var particles = point.Particles.IsDefaultOrEmpty ? DefaultParticles : [.. point.Particles.Order()];
-        var media = Enum.GetValues<CorrelationSet>().Select(set => new MediumModel(layers, point, SingleFibreModel.Of(set))).ToArray();
+        var media = SingleFibreModel.Published.Append(settings.Correlations).Distinct().Select(set => new MediumModel(layers, point, SingleFibreModel.Of(set))).ToArray();
         var central = media.Single(m => m.Model.Set == settings.Correlations);
         var curve = particles.Select(p => Point(p, central, media)).ToImmutableArray();
         var velocity = point.FaceVelocity.MetersPerSecond;

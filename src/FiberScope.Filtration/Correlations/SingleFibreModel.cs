@@ -3,6 +3,10 @@ namespace FiberScope.Filtration.Correlations;
 /// <summary>One correlation set, whole: efficiency, drag, (1 − α) convention and range.</summary>
 internal abstract class SingleFibreModel
 {
+    /// <summary>The published sets whose spread is the model band.</summary>
+    public static IReadOnlyList<CorrelationSet> Published { get; } =
+        [CorrelationSet.KirschStechkina1978, CorrelationSet.LeeLiu1982, CorrelationSet.Hinds1999];
+
     public abstract CorrelationSet Set { get; }
 
     /// <summary>Where the set was fitted.</summary>
