@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using UnitsNet;
 
 namespace FiberScope.Fibres;
 
