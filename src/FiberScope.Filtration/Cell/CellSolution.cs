@@ -17,11 +17,14 @@ public sealed class CellSolution
     /// </summary>
     private const double MilneLength = 1.46035;
 
-    /// <summary>Scaled Stokes number at which half of the diffusive reach still counts; fitted to the stochastic reference.</summary>
-    private const double CrossingStokes = 0.41;
+    /// <summary>How fast the share of the diffusive reach fades where diffusion reaches far; fitted to the stochastic reference.</summary>
+    private const double FadingFar = 1.2;
 
-    /// <summary>How fast that share falls; fitted to the stochastic reference.</summary>
-    private const double CrossingExponent = 1.5;
+    /// <summary>How much faster where it adds little to interception; fitted likewise.</summary>
+    private const double FadingNear = 4;
+
+    /// <summary>Scaled Stokes number beyond which particles cross the diffusive reach; fitted likewise.</summary>
+    private const double CrossingStokes = 0.84;
 
     private readonly CellSurface _diffusion;
     private readonly CellSurface _impaction;
@@ -95,7 +98,7 @@ public sealed class CellSolution
     /// Diffusion is taken as a larger reach: R* is the interception parameter that would collect by interception alone what
     /// diffusion and interception collect without inertia. Inertia acts on R* while particles follow the air, and on R when
     /// they cross it so fast that diffusion brings in as many as it takes away; between them the share of R* falls with the
-    /// scaled Stokes number. Exact when diffusion or inertia vanishes. The two constants of that share are fitted to
+    /// scaled Stokes number. Exact when diffusion or inertia vanishes. The three constants of that share are fitted to
     /// particles followed with both at once; how well they do at other points is in the validation document.
     /// </remarks>
     /// <param name="peclet">Pe = U df / D; dimensionless, above zero; infinity means no diffusion.</param>
@@ -117,9 +120,18 @@ public sealed class CellSolution
             return fast;
         }
 
-        var reach = Flow.ReachOf(WithKineticLayer(slow, peclet, ratio, stokes), ratio);
-        var following = 1 / (1 + Math.Pow(ScaledStokes(Flow, stokes) / CrossingStokes, CrossingExponent));
+        var reach = Math.Max(ratio, Flow.ReachOf(WithKineticLayer(slow, peclet, ratio, stokes), ratio));
+        var following = Following(ScaledStokes(Flow, stokes), reach > 0 ? ratio / reach : 0);
         return Math.Clamp(fast + (following * (ImpactionInterception(reach, stokes) - fast)), 0, Flow.Rim);
+    }
+
+    /// <summary>How much particles still follow the air through the diffusive reach; 1 without inertia, 0 when they cross it.</summary>
+    private static double Following(double scaledStokes, double nearness)
+    {
+        var fading = FadingFar + (FadingNear * nearness * nearness * nearness);
+        var crossing = scaledStokes / CrossingStokes;
+        var cubed = crossing * crossing * crossing;
+        return Math.Exp(-fading * scaledStokes) / (1 + (cubed * cubed));
     }
 
     /// <summary>Diffusion slowed by the layer, a particle's own free path deep, in which it cannot be told from free flight.</summary>
