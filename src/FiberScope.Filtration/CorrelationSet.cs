@@ -1,6 +1,6 @@
 namespace FiberScope.Filtration;
 
-/// <summary>A published set of single-fibre formulas, taken whole: efficiency, drag, (1 − α) convention and range.</summary>
+/// <summary>A set of single-fibre formulas, taken whole: efficiency, drag, (1 − α) convention and range.</summary>
 public enum CorrelationSet
 {
     /// <summary>The fan model with an inhomogeneity factor (Kirsch and Stechkina 1978); <c>kirsch-stechkina-1978</c>.</summary>
@@ -11,4 +11,7 @@ public enum CorrelationSet
 
     /// <summary>The textbook set of Hinds (1999), chapter 9; <c>hinds-1999</c>.</summary>
     Hinds1999,
+
+    /// <summary>The numerical solution of the Kuwabara cell with slip, tabulated; <c>cell</c>.</summary>
+    Cell,
 }

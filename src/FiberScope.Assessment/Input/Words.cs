@@ -20,6 +20,7 @@ public static class Words
         ["kirsch-stechkina-1978"] = CorrelationSet.KirschStechkina1978,
         ["lee-liu-1982"] = CorrelationSet.LeeLiu1982,
         ["hinds-1999"] = CorrelationSet.Hinds1999,
+        ["cell"] = CorrelationSet.Cell,
     };
 
     /// <summary>The word for a choice.</summary>

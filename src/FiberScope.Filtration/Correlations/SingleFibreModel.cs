@@ -35,6 +35,7 @@ internal abstract class SingleFibreModel
         CorrelationSet.KirschStechkina1978 => new KirschStechkinaModel(),
         CorrelationSet.LeeLiu1982 => new LeeLiuModel(),
         CorrelationSet.Hinds1999 => new HindsModel(),
+        CorrelationSet.Cell => new CellModel(),
         _ => throw new ArgumentOutOfRangeException(nameof(set), set, "There is no model for this set of correlations."),
     };
 }
