@@ -1,11 +1,13 @@
 using System.CommandLine;
 using FiberScope.Validation.Filtration;
 using FiberScope.Validation.Imaging;
+using FiberScope.Validation.Samples;
 
 var root = new RootCommand("Measures FiberScope against outside references and writes what it finds to docs/validation.md.")
 {
     FiltrationCommand.Create(),
     ImagingCommand.Create(),
+    SamplesCommand.Create(),
 };
 
 return root.Parse(args).Invoke();
