@@ -36,7 +36,7 @@ public sealed class TruthTests
     [Fact]
     public void A_section_covers_the_area_that_the_solidity_asks_for()
     {
-        var recipe = SpecimenFamilies.Find("cross-sections")!;
+        var recipe = SpecimenFamilies.Find("cross-sections")! with { WidthPixels = 1000, HeightPixels = 800 };
         var share = Enumerable.Range(0, 3).Average(i => Make(recipe, (ulong)i).Solidity);
         Assert.InRange(share, recipe.Mat.Solidity - 0.01, recipe.Mat.Solidity + 0.01);
     }
@@ -44,7 +44,7 @@ public sealed class TruthTests
     [Fact]
     public void Defects_are_counted_where_they_can_be_seen()
     {
-        var specimen = VirtualSpecimen.Make(SpecimenFamilies.Find("ropes-shot-films")!, 2, TestContext.Current.CancellationToken);
+        var specimen = VirtualSpecimen.Make(SpecimenFamilies.Find("ropes-shot-films")! with { WidthPixels = 900, HeightPixels = 700 }, 2, TestContext.Current.CancellationToken);
         foreach (var kind in Enum.GetValues<DefectForm>())
         {
             var marked = specimen.DefectMask.Count((byte)kind);

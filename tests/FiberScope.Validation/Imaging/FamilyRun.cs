@@ -15,7 +15,7 @@ internal static class FamilyRun
             var specimen = SpecimenPicture.Of(family, reporting, i);
             var picture = SpecimenPicture.Micrograph(specimen);
             var clock = Stopwatch.StartNew();
-            var measurement = quick ? null : FieldMeterGate.Measure(picture);
+            var measurement = quick ? null : FieldMeter.Measure(picture, new MeasurementSettings());
             IReadOnlyList<PixelReading> readings = measurement is null ? QuickWay.Measure(picture) : measurement.Readings;
             checks.Add(FieldCheck.Of(specimen, measurement, readings, i, clock.Elapsed));
         }
