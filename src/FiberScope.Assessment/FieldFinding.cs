@@ -21,6 +21,9 @@ public sealed record FieldFinding
     /// <summary>The number-weighted figures of this field alone; null without readings.</summary>
     public required DiameterStatistics? NumberWeighted { get; init; }
 
+    /// <summary>The relative standard uncertainty of its pixel size; dimensionless.</summary>
+    public double PixelSizeUncertainty { get; init; } = 0.01;
+
     /// <summary>Why the field's readings are left out of the pooled figures, one sentence; null when they are in.</summary>
     public required string? LeftOutBecause { get; init; }
 

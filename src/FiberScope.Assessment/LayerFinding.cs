@@ -30,4 +30,10 @@ public sealed record LayerFinding
 
     /// <summary>Thickness; null when not told.</summary>
     public required Length? Thickness { get; init; }
+
+    /// <summary>The relative standard uncertainty of <see cref="BasisWeight"/>; dimensionless.</summary>
+    public double BasisWeightUncertainty { get; init; } = Measuring.SolidityRoutes.BasisWeightUncertainty;
+
+    /// <summary>The relative standard uncertainty of <see cref="Thickness"/>; dimensionless.</summary>
+    public double ThicknessUncertainty { get; init; } = Measuring.SolidityRoutes.ThicknessUncertainty;
 }

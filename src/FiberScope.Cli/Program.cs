@@ -1,3 +1,4 @@
-using System.CommandLine;
+using FiberScope.Cli;
+using FiberScope.Cli.Console;
 
-return await new RootCommand("FiberScope: from micrographs of filter media to fibre diameters, solidity and a filtration forecast.").Parse(args).InvokeAsync();
+return await FiberScopeProgram.RunAsync(args, CommandConsole.OfProcess(), TimeProvider.System, CancellationToken.None);

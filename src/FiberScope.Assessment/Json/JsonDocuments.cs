@@ -1,0 +1,28 @@
+using System.Collections.Immutable;
+using FiberScope.Fibres;
+using FiberScope.Filtration;
+
+namespace FiberScope.Assessment.Json;
+
+/// <summary>Writes the machine-readable outputs; their schemas stand in <c>docs/schemas</c>.</summary>
+public static class JsonDocuments
+{
+    /// <summary>Writes a measurement file.</summary>
+    /// <param name="fields">The fields, in order.</param>
+    /// <param name="survey">The pooled diameters; null when no field counts.</param>
+    /// <param name="solidity">The solidity; null when nothing told it.</param>
+    /// <param name="caveats">What a reader must know.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void Measurement(IEnumerable<FieldFinding> fields, DiameterSurvey? survey, SolidityFinding? solidity, ImmutableArray<Caveat> caveats, Stream destination) =>
+        JsonText.Write(destination, MeasurementEntry.Of(fields, survey, solidity, caveats));
+
+    /// <summary>Writes a prediction file.</summary>
+    /// <param name="forecast">The forecast.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void Prediction(MediaForecast forecast, Stream destination) => JsonText.Write(destination, PredictionEntry.Of(forecast));
+
+    /// <summary>Writes an assessment file.</summary>
+    /// <param name="assessment">The assessment.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void Assessment(SwatchAssessment assessment, Stream destination) => JsonText.Write(destination, AssessmentEntry.Of(assessment));
+}

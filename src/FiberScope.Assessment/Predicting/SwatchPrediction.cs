@@ -1,0 +1,23 @@
+using System.Collections.Immutable;
+using FiberScope.Assessment.Input;
+using FiberScope.Filtration;
+using UnitsNet;
+
+namespace FiberScope.Assessment.Predicting;
+
+/// <summary>The forecast of one swatch and everything that is asked of it besides.</summary>
+internal sealed class SwatchPrediction(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastSettings settings, CancellationToken cancellation)
+{
+    public MediaForecast Forecast { get; } = Predictor.Forecast(layers, operation, settings, cancellation);
+
+    public ImmutableArray<VelocityPoint> Sweep() => Predictor.Sweep(layers, operation, settings, cancellation);
+
+    public ImmutableArray<AirPermeability> Permeabilities() => Predictor.Permeabilities(layers, operation, settings, cancellation);
+
+    public ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests) => Predictor.Compare(tests, layers, operation, settings, cancellation);
+
+    public ForecastFindings Findings() => new(Forecast, At, pressure => Predictor.Permeability(layers, operation, pressure, settings, cancellation));
+
+    private CurvePoint At(Length particle) =>
+        Predictor.Forecast(layers, operation with { Particles = [particle] }, settings, cancellation).Curve[0];
+}
