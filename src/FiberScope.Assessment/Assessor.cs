@@ -4,7 +4,6 @@ using FiberScope.Assessment.Measuring;
 using FiberScope.Assessment.Predicting;
 using FiberScope.Fibres;
 using FiberScope.Filtration;
-using UnitsNet;
 
 namespace FiberScope.Assessment;
 

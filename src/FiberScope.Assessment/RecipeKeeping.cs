@@ -1,7 +1,6 @@
 using System.Globalization;
 using FiberScope.Assessment.Input;
 using FiberScope.Assessment.Measuring;
-using FiberScope.Fibres;
 
 namespace FiberScope.Assessment;
 

@@ -41,6 +41,8 @@ internal sealed record FieldEntry
 
     public required StatisticsEntry? NumberWeighted { get; init; }
 
+    public required OrientationEntry? Orientation { get; init; }
+
     public required DefectEntry[] Defects { get; init; }
 
     public static FieldEntry Of(FieldFinding field)
@@ -67,6 +69,7 @@ internal sealed record FieldEntry
             Rejected = measurement.Rejected,
             LengthWeighted = field.LengthWeighted is { } byLength ? StatisticsEntry.Of(byLength) : null,
             NumberWeighted = field.NumberWeighted is { } byNumber ? StatisticsEntry.Of(byNumber) : null,
+            Orientation = OrientationEntry.Of(measurement),
             Defects = [.. measurement.Defects.Select(d => DefectEntry.Of(d, pixel))],
         };
     }
@@ -92,4 +95,28 @@ internal sealed record DefectEntry(
         defect.AreaPixels,
         defect.AreaPixels * pixelMicrometres * pixelMicrometres,
         [.. defect.Outline.Select(c => new[] { c.X, c.Y })]);
+}
+
+/// <summary>The length-weighted directions of a field's readings.</summary>
+internal sealed record OrientationEntry(double PrincipalDirectionDeg, double OrderParameter)
+{
+    /// <summary>The principal direction and ⟨cos 2θ⟩ about it: the first moment of doubled angles, weighted by length.</summary>
+    public static OrientationEntry? Of(FieldMeasurement measurement)
+    {
+        double length = 0, cosine = 0, sine = 0;
+        foreach (var reading in measurement.Readings)
+        {
+            length += reading.RepresentedLength;
+            cosine += reading.RepresentedLength * Math.Cos(2 * reading.Direction);
+            sine += reading.RepresentedLength * Math.Sin(2 * reading.Direction);
+        }
+
+        if (!(length > 0))
+        {
+            return null;
+        }
+
+        var degrees = Math.Atan2(sine, cosine) / 2 * 180 / Math.PI;
+        return new OrientationEntry(degrees < 0 ? degrees + 180 : degrees, Math.Sqrt((cosine * cosine) + (sine * sine)) / length);
+    }
 }

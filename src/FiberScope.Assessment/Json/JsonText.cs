@@ -14,6 +14,12 @@ internal static class JsonText
         WriteIndented = true,
         NewLine = "\n",
         Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
+        Converters = { new SevenDigits(), new OnOneLine<ReadingEntry>(), new OnOneLine<double[]>(), new OnOneLine<int[][]>() },
+    };
+
+    private static readonly JsonSerializerOptions Compact = new()
+    {
+        PropertyNamingPolicy = JsonNamingPolicy.SnakeCaseLower,
         Converters = { new SevenDigits() },
     };
 
@@ -39,5 +45,15 @@ internal static class JsonText
                 writer.WriteNullValue();
             }
         }
+    }
+
+    /// <summary>Keeps what belongs together on one line, so that a file of thousands of readings can be read and compared.</summary>
+    private sealed class OnOneLine<T> : JsonConverter<T>
+    {
+        public override T? Read(ref Utf8JsonReader reader, Type typeToConvert, JsonSerializerOptions options) =>
+            JsonSerializer.Deserialize<T>(ref reader, Compact);
+
+        public override void Write(Utf8JsonWriter writer, T value, JsonSerializerOptions options) =>
+            writer.WriteRawValue(JsonSerializer.SerializeToUtf8Bytes(value, Compact), skipInputValidation: true);
     }
 }

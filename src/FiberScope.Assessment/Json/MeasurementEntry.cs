@@ -1,7 +1,6 @@
 using System.Collections.Immutable;
 using System.Text.Json;
 using System.Text.Json.Serialization;
-using FiberScope.Assessment.Measuring;
 using FiberScope.Fibres;
 using FiberScope.Imaging;
 using FiberScope.Statistics;

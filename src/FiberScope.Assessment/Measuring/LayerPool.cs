@@ -42,12 +42,12 @@ public sealed record LayerPool(DiameterSurvey Survey, ImmutableArray<Caveat> Cav
         return new LayerPool(survey, [.. caveats, .. survey.Caveats]);
     }
 
-    private static IEnumerable<DiameterReading> Pool(FieldFinding[] fields, ImmutableArray<Caveat>.Builder caveats)
+    private static ImmutableArray<DiameterReading> Pool(FieldFinding[] fields, ImmutableArray<Caveat>.Builder caveats)
     {
         var groups = Magnifications(fields);
         if (groups.Count == 1)
         {
-            return fields.SelectMany(Readings);
+            return [.. fields.SelectMany(f => Readings(f))];
         }
 
         var pool = MagnificationPool.Of(groups.Select(Group));
@@ -90,7 +90,7 @@ public sealed record LayerPool(DiameterSurvey Survey, ImmutableArray<Caveat> Cav
         }
 
         return new MagnificationGroup(
-            [.. fields.SelectMany(Readings)],
+            [.. fields.SelectMany(f => Readings(f))],
             Area.FromSquareMeters(area),
             new LengthInterval(Length.FromMeters(smallest), Length.FromMeters(Math.Max(smallest, widest))));
     }

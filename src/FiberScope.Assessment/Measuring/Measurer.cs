@@ -4,7 +4,6 @@ using FiberScope.Assessment.Input;
 using FiberScope.Fibres;
 using FiberScope.Imaging;
 using FiberScope.Imaging.Files;
-using UnitsNet;
 
 namespace FiberScope.Assessment.Measuring;
 
@@ -25,11 +24,14 @@ public sealed class Measurer(MeasuringSettings settings)
         var waiting = Read(sets, files, steps, cancellation);
         steps.Extend(waiting.Length);
         var fields = new FieldFinding[waiting.Length];
-        Run(waiting.Length, cancellation, i =>
-        {
-            fields[i] = One(waiting[i], i + 1, cancellation);
-            steps.Done("measured " + waiting[i].Name);
-        });
+        Run(
+            waiting.Length,
+            i =>
+            {
+                fields[i] = One(waiting[i], i + 1, cancellation);
+                steps.Done("measured " + waiting[i].Name);
+            },
+            cancellation);
         return [.. sets.Select((_, set) => waiting.Zip(fields).Where(p => p.First.Set == set).Select(p => p.Second).ToImmutableArray())];
     }
 
@@ -61,23 +63,25 @@ public sealed class Measurer(MeasuringSettings settings)
     private WaitingField[] Read(IReadOnlyList<ImageSet> sets, List<WantedFile> files, StepCounter steps, CancellationToken cancellation)
     {
         var pages = new IReadOnlyList<Micrograph>[files.Count];
-        var problems = new ConcurrentBag<(int Order, InputProblem Problem)>();
-        Run(files.Count, cancellation, i =>
-        {
-            var wanted = files[i];
-            try
+        var problems = new ConcurrentBag<(int Order, string Message)>();
+        Run(
+            files.Count,
+            i =>
             {
-                pages[i] = MicrographReader.Read(wanted.Image.Path, Scale(wanted.Group), sets[wanted.Set].Imaging);
-                steps.Done("read " + wanted.Image.Name);
-            }
-            catch (ImageRejectedException e)
-            {
-                problems.Add((i, new InputProblem(wanted.Image.Name, 0, WithoutPath(e.Message, wanted.Image))));
-            }
-        });
+                try
+                {
+                    pages[i] = Pages(files[i], sets[files[i].Set].Imaging);
+                    steps.Done("read " + files[i].Image.Name);
+                }
+                catch (ImageRejectedException e)
+                {
+                    problems.Add((i, e.Message));
+                }
+            },
+            cancellation);
         return problems.IsEmpty
             ? [.. files.SelectMany((wanted, i) => pages[i].Select(page => new WaitingField(wanted.Set, Name(wanted, page, pages[i].Count), page, wanted.Group.PixelSize)))]
-            : throw new InputException(problems.OrderBy(p => p.Order).Select(p => p.Problem));
+            : throw new InputException(string.Join('\n', problems.OrderBy(p => p.Order).Select(p => p.Message)));
     }
 
     private FieldFinding One(WaitingField field, int number, CancellationToken cancellation)
@@ -113,7 +117,7 @@ public sealed class Measurer(MeasuringSettings settings)
         return $"unfit for measuring ({string.Join(", ", failed.Select(c => c.Name))}): {failed[0].Advice}";
     }
 
-    private void Run(int count, CancellationToken cancellation, Action<int> step)
+    private void Run(int count, Action<int> step, CancellationToken cancellation)
     {
         var options = new ParallelOptions { MaxDegreeOfParallelism = settings.Parallelism, CancellationToken = cancellation };
         try
@@ -140,9 +144,17 @@ public sealed class Measurer(MeasuringSettings settings)
     private static string Name(WantedFile wanted, Micrograph page, int pages) =>
         pages == 1 ? wanted.Image.Name : FormattableString.Invariant($"{wanted.Image.Name}#{page.Source.Page + 1}");
 
-    /// <summary>The reader names the file by its path; people read it by the name they gave, which stands in front already.</summary>
-    private static string WithoutPath(string message, FoundImage image) =>
-        message.StartsWith(image.Path + ": ", StringComparison.Ordinal) ? message[(image.Path.Length + 2)..] : message.Replace(image.Path, image.Name, StringComparison.Ordinal);
+    private static IReadOnlyList<Micrograph> Pages(WantedFile wanted, ImagingMode imaging)
+    {
+        try
+        {
+            return MicrographReader.Read(File.ReadAllBytes(wanted.Image.Path), wanted.Image.Name, Scale(wanted.Group), imaging);
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            throw new ImageRejectedException($"{wanted.Image.Name}: cannot be read: {e.Message.Split('\n')[0]}", e);
+        }
+    }
 
     private sealed record WantedFile(int Set, ImageGroup Group, FoundImage Image);
 }

@@ -1,4 +1,3 @@
-using FiberScope.Fibres;
 using FiberScope.Imaging;
 using FiberScope.Statistics;
 

@@ -1,6 +1,5 @@
 using FiberScope.Conformity;
 using FiberScope.Filtration;
-using FiberScope.Statistics;
 using UnitsNet;
 
 namespace FiberScope.Assessment.Predicting;

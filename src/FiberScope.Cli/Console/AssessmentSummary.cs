@@ -14,7 +14,7 @@ internal static class AssessmentSummary
 
     public static void Print(IAnsiConsole console, SwatchAssessment assessment)
     {
-        console.MarkupLineInterpolated($"[bold]{assessment.Identity.Title}[/]");
+        console.MarkupLine($"[bold]{Markup.Escape(assessment.Identity.Title)}[/]");
         foreach (var layer in assessment.Layers)
         {
             console.Write(Layer(layer, assessment.Layers.Length > 1));
@@ -96,7 +96,7 @@ internal static class AssessmentSummary
         console.MarkupLine($"[{style}]{Markup.Escape(verdict.Sentence)}[/]");
         foreach (var limit in verdict.Verdicts)
         {
-            console.MarkupLineInterpolated($"  {limit.Sentence}");
+            console.WriteLine("  " + limit.Sentence);
         }
     }
 
@@ -104,17 +104,17 @@ internal static class AssessmentSummary
     {
         foreach (var caveat in assessment.Caveats.Take(MostNotes))
         {
-            console.MarkupLineInterpolated($"Note: {caveat.Message}");
+            console.WriteLine("Note: " + caveat.Message);
         }
 
         if (assessment.Caveats.Length > MostNotes)
         {
-            console.MarkupLineInterpolated($"Note: {assessment.Caveats.Length - MostNotes} more in assessment.json.");
+            console.WriteLine(FormattableString.Invariant($"Note: {assessment.Caveats.Length - MostNotes} more in assessment.json."));
         }
 
         if (assessment.Forecast is not null)
         {
-            console.MarkupLineInterpolated($"[italic]{Cautions.All[0]}[/]");
+            console.MarkupLine($"[italic]{Markup.Escape(Cautions.All[0])}[/]");
         }
     }
 

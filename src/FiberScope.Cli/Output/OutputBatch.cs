@@ -25,7 +25,7 @@ public sealed class OutputBatch : IDisposable
             existing = Path.GetDirectoryName(existing) ?? throw new NotWritableException($"Cannot write to '{folder}': no such place; choose another --out.");
         }
 
-        var probe = Path.Combine(existing, $".fiberscope-{Environment.ProcessId}.probe");
+        var probe = Path.Combine(existing, FormattableString.Invariant($".fiberscope-{Environment.ProcessId}.probe"));
         Guarded(folder, () =>
         {
             using var stream = new FileStream(probe, FileMode.CreateNew, FileAccess.Write, FileShare.None, 1, FileOptions.DeleteOnClose);
@@ -51,7 +51,7 @@ public sealed class OutputBatch : IDisposable
     public void Add(string path, Action<Stream> write)
     {
         var final = Path.GetFullPath(path);
-        var temporary = $"{final}.{Environment.ProcessId}.part";
+        var temporary = FormattableString.Invariant($"{final}.{Environment.ProcessId}.part");
         Guarded(path, () =>
         {
             MakeFolder(Path.GetDirectoryName(final)!);
