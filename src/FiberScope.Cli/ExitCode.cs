@@ -21,6 +21,9 @@ public static class ExitCode
     /// <summary>Asked to tell the verdict by exit code: it is undecided.</summary>
     public const int VerdictUndecided = 5;
 
+    /// <summary>A fault of the program itself (EX_SOFTWARE of the BSD sysexits list).</summary>
+    public const int OwnFault = 70;
+
     /// <summary>Stopped by Ctrl-C; nothing was written.</summary>
     public const int Cancelled = 130;
 }

@@ -10,6 +10,9 @@ namespace FiberScope.Cli;
 /// <summary>The front door: parses the command line, runs the command, and maps the outcome to an exit code.</summary>
 public static class FiberScopeProgram
 {
+    /// <summary>Set to 1, this environment variable lets a fault of the program show where it arose.</summary>
+    private const string FullFault = "FIBERSCOPE_FULL_FAULT";
+
     /// <summary>How long a cancelled command may take to clean up.</summary>
     private static readonly TimeSpan CleanUpTime = TimeSpan.FromSeconds(20);
 
@@ -76,5 +79,12 @@ public static class FiberScopeProgram
             await console.Error.WriteLineAsync(e.Message);
             return ExitCode.NativeLibraryMissing;
         }
+#pragma warning disable CA1031 // The last line of defence: a fault of the program itself must not show people a stack trace.
+        catch (Exception e) when (Environment.GetEnvironmentVariable(FullFault) is not "1")
+        {
+            await console.Error.WriteLineAsync($"A fault of FiberScope itself stopped this run; nothing was written: {e.GetType().Name}: {e.Message.ReplaceLineEndings(" ")} Please report it; {FullFault}=1 shows where it arose.");
+            return ExitCode.OwnFault;
+        }
+#pragma warning restore CA1031
     }
 }

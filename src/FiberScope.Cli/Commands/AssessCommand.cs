@@ -7,13 +7,14 @@ using FiberScope.Cli.Console;
 using FiberScope.Cli.Output;
 using FiberScope.Conformity;
 using FiberScope.Imaging;
+using FiberScope.Reports;
 
 namespace FiberScope.Cli.Commands;
 
 /// <summary><c>assess SWATCH.yaml</c>: the main job.</summary>
 internal static class AssessCommand
 {
-    private static readonly IReadOnlyList<IReportWriter> Reports = [];
+    private static readonly IReadOnlyList<IReportWriter> Reports = [new HtmlReport()];
 
     public static Command Build(CommandConsole console, TimeProvider clock)
     {

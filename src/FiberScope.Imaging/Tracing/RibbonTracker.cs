@@ -115,7 +115,7 @@ internal sealed class RibbonTracker
     private State Measure(State at)
     {
         var half = at.HalfWidth;
-        var reach = (int)MathF.Ceiling(((1.3f * half) + 3f) / SampleStep);
+        var reach = Math.Min((_profile.Length - 1) / 2, (int)MathF.Ceiling(((1.3f * half) + 3f) / SampleStep));
         var count = (2 * reach) + 1;
         Average(at, reach, count);
         Smooth(count);
