@@ -5,7 +5,7 @@ using UnitsNet;
 namespace FiberScope.Assessment.Predicting;
 
 /// <summary>What a forecast says about the characteristics that a grade may limit.</summary>
-internal sealed class ForecastFindings(MediaForecast forecast, Func<Length, CurvePoint> at, Func<Pressure, AirPermeability> permeability)
+internal sealed class ForecastFindings(MediaForecast forecast, Func<Length, CurvePoint> at, Func<Pressure, Speed> permeability)
 {
     private const double NormalWidth95 = 2 * 1.959964;
 
@@ -22,10 +22,10 @@ internal sealed class ForecastFindings(MediaForecast forecast, Func<Length, Curv
             return Penetration(at(particle));
         }
 
-        return c == Characteristic.PressureDrop ? Plain(forecast.PressureDrop)
+        return c == Characteristic.PressureDrop ? PressureDrop()
             : c == Characteristic.MostPenetratingSize && forecast.MostPenetratingSize is { } size ? Plain(size)
             : c == Characteristic.QualityFactor ? Plain(Compressibility.FromInversePascals(forecast.QualityFactorPerPascal))
-            : c == Characteristic.AirPermeability && limit.TestPressure is { } pressure ? Plain(permeability(pressure).FaceVelocity)
+            : c == Characteristic.AirPermeability && limit.TestPressure is { } pressure ? Permeability(pressure)
             : null;
     }
 
@@ -39,6 +39,19 @@ internal sealed class ForecastFindings(MediaForecast forecast, Func<Length, Curv
             Scale = point.Penetration > 0 ? UncertaintyScale.Logarithmic : UncertaintyScale.Linear,
             ModelBand = (Ratio.FromDecimalFractions(point.ModelBand.Low), Ratio.FromDecimalFractions(point.ModelBand.High)),
         };
+    }
+
+    private ObservedValue PressureDrop() => Plain(forecast.PressureDrop) with
+    {
+        ModelBand = (Pressure.FromPascals(forecast.PressureDropModelBandPascals.Low), Pressure.FromPascals(forecast.PressureDropModelBandPascals.High)),
+    };
+
+    /// <summary>Velocity at a pressure drop falls as the drag rises, so the band of the pressure drop turns over.</summary>
+    private ObservedValue Permeability(Pressure pressure)
+    {
+        var velocity = permeability(pressure);
+        var (central, band) = (forecast.PressureDrop.Pascals, forecast.PressureDropModelBandPascals);
+        return Plain(velocity) with { ModelBand = (velocity * (central / band.High), velocity * (central / band.Low)) };
     }
 
     private static ObservedValue Plain(IQuantity value) => new(value, Quantity.From(0, value.Unit));

@@ -31,26 +31,8 @@ public static class Predictor
 
     /// <summary>Air permeability at the pressure drops of the usual textile tests, 125 Pa and 200 Pa.</summary>
     /// <remarks>ISO 9237:1995 names 100 Pa and 200 Pa, ASTM D737 125 Pa (from memory).</remarks>
-    public static ImmutableArray<AirPermeability> Permeabilities(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastSettings settings, CancellationToken cancellation) =>
-        [.. PermeabilityTests.Select(p => Permeability(layers, operation, Pressure.FromPascals(p), settings, cancellation))];
-
-    /// <summary>The face velocity that a pressure drop drives.</summary>
-    /// <remarks>Pressure drop is all but proportional to velocity, so each step of v ← v p / Δp(v) lands within rounding after a few.</remarks>
-    public static AirPermeability Permeability(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, Pressure wanted, ForecastSettings settings, CancellationToken cancellation)
-    {
-        var velocity = operation.FaceVelocity;
-        for (var step = 0; step < 8; step++)
-        {
-            var ratio = wanted / At(layers, operation, velocity, settings, cancellation).PressureDrop;
-            velocity *= ratio;
-            if (Math.Abs(ratio - 1) < 1e-9)
-            {
-                break;
-            }
-        }
-
-        return new AirPermeability(wanted, velocity);
-    }
+    public static ImmutableArray<AirPermeability> Permeabilities(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastSettings settings) =>
+        [.. PermeabilityTests.Select(p => Pressure.FromPascals(p)).Select(p => new AirPermeability(p, MediaModel.AirPermeability(layers, operation, p, settings)))];
 
     /// <summary>Rig results beside the forecast for the same conditions.</summary>
     public static ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests, IReadOnlyList<MediaLayer>? layers, OperatingPoint? operation, ForecastSettings settings, CancellationToken cancellation) =>

@@ -12,11 +12,11 @@ internal sealed class SwatchPrediction(IReadOnlyList<MediaLayer> layers, Operati
 
     public ImmutableArray<VelocityPoint> Sweep() => Predictor.Sweep(layers, operation, settings, cancellation);
 
-    public ImmutableArray<AirPermeability> Permeabilities() => Predictor.Permeabilities(layers, operation, settings, cancellation);
+    public ImmutableArray<AirPermeability> Permeabilities() => Predictor.Permeabilities(layers, operation, settings);
 
     public ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests) => Predictor.Compare(tests, layers, operation, settings, cancellation);
 
-    public ForecastFindings Findings() => new(Forecast, At, pressure => Predictor.Permeability(layers, operation, pressure, settings, cancellation));
+    public ForecastFindings Findings() => new(Forecast, At, pressure => MediaModel.AirPermeability(layers, operation, pressure, settings));
 
     private CurvePoint At(Length particle) =>
         Predictor.Forecast(layers, operation with { Particles = [particle] }, settings, cancellation).Curve[0];
