@@ -43,15 +43,18 @@ internal sealed class ForecastFindings(MediaForecast forecast, Func<Length, Curv
 
     private ObservedValue PressureDrop() => Plain(forecast.PressureDrop) with
     {
-        ModelBand = (Pressure.FromPascals(forecast.PressureDropModelBandPascals.Low), Pressure.FromPascals(forecast.PressureDropModelBandPascals.High)),
+        ModelBand = forecast.PressureDropModelBandPascals is { } band ? (Pressure.FromPascals(band.Low), Pressure.FromPascals(band.High)) : null,
     };
 
     /// <summary>Velocity at a pressure drop falls as the drag rises, so the band of the pressure drop turns over.</summary>
     private ObservedValue Permeability(Pressure pressure)
     {
         var velocity = permeability(pressure);
-        var (central, band) = (forecast.PressureDrop.Pascals, forecast.PressureDropModelBandPascals);
-        return Plain(velocity) with { ModelBand = (velocity * (central / band.High), velocity * (central / band.Low)) };
+        var central = forecast.PressureDrop.Pascals;
+        return Plain(velocity) with
+        {
+            ModelBand = forecast.PressureDropModelBandPascals is { } band ? (velocity * (central / band.High), velocity * (central / band.Low)) : null,
+        };
     }
 
     private static ObservedValue Plain(IQuantity value) => new(value, Quantity.From(0, value.Unit));

@@ -62,7 +62,7 @@ internal static class AssessmentSummary
         table.AddColumn(FormattableString.Invariant($"Forecast at {forecast.OperatingPoint.FaceVelocity.CentimetersPerSecond:G4} cm/s"));
         table.AddColumn(new TableColumn("").RightAligned());
         table.AddColumn("");
-        Row(table, "pressure drop", FormattableString.Invariant($"{forecast.PressureDrop.Pascals:G4} Pa"), FormattableString.Invariant($"models {forecast.PressureDropModelBandPascals.Low:G4} to {forecast.PressureDropModelBandPascals.High:G4} Pa"));
+        Row(table, "pressure drop", FormattableString.Invariant($"{forecast.PressureDrop.Pascals:G4} Pa"), forecast.PressureDropModelBandPascals is { } band ? FormattableString.Invariant($"models {band.Low:G4} to {band.High:G4} Pa") : "");
         Row(table, "penetration", ForecastText.Percent(forecast.PenetrationAtMostPenetratingSize), Worst(forecast));
         Row(table, "quality factor there", FormattableString.Invariant($"{forecast.QualityFactorPerPascal:G3} 1/Pa"), "");
         Row(table, "air permeability", string.Join(", ", assessment.AirPermeabilities.Select(p => FormattableString.Invariant($"{p.FaceVelocity.MillimetersPerSecond:G4} mm/s"))), "at " + string.Join(" and ", assessment.AirPermeabilities.Select(p => FormattableString.Invariant($"{p.PressureDrop.Pascals:G4} Pa"))));
