@@ -35,7 +35,11 @@ internal static class RecipeKeeping
         yield return Entry("seed", Number(m.Seed), m.Seed == standard.Seed);
         yield return Entry("basis weight, relative standard uncertainty unless told", Number(SolidityRoutes.BasisWeightUncertainty), isDefault: true);
         yield return Entry("thickness, relative standard uncertainty unless told", Number(SolidityRoutes.ThicknessUncertainty), isDefault: true);
-        yield return Entry("field measuring", m.Fields.ToString(), m.Fields == standard.Fields);
+        foreach (var (name, value, isDefault) in SettingText.Of(m.Fields, standard.Fields))
+        {
+            yield return Entry(name, value, isDefault);
+        }
+
         if (settings.Correlations is { } chosen)
         {
             yield return Entry("correlations", Words.Of(Words.Correlations, chosen), isDefault: false);

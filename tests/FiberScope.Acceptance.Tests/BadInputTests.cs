@@ -105,7 +105,7 @@ public sealed class BadInputTests(SmallFields fields) : IClassFixture<SmallField
         var run = await CommandRun.OfAsync("measure", fields.Field(1), "--pixel-size", "24.8", "--json", "-");
         Assert.Equal(ExitCode.BadInput, run.Code);
         Assert.Contains("--pixel-size: '24.8' has no unit", Assert.Single(run.ErrorLines), StringComparison.Ordinal);
-        Assert.Empty(run.Output);
+        Assert.True(run.Output.IsEmpty);
     }
 
     [Fact]

@@ -5,13 +5,13 @@ using FiberScope.Cli.Console;
 namespace FiberScope.Acceptance.Tests;
 
 /// <summary>One run of the program through its front door, with what it said.</summary>
-public sealed record CommandRun(int Code, string Out, string Error, byte[] Output)
+public sealed record CommandRun(int Code, string Out, string Error, ReadOnlyMemory<byte> Output)
 {
     /// <summary>The time that results are stamped with in tests.</summary>
     public static readonly DateTimeOffset Now = new(2031, 5, 17, 8, 30, 0, TimeSpan.Zero);
 
     /// <summary>The complaints, line by line.</summary>
-    public string[] ErrorLines => Error.Split('\n', StringSplitOptions.RemoveEmptyEntries | StringSplitOptions.TrimEntries);
+    public IReadOnlyList<string> ErrorLines => Error.Split('\n', StringSplitOptions.RemoveEmptyEntries | StringSplitOptions.TrimEntries);
 
     public static Task<CommandRun> OfAsync(params string[] arguments) => OfAsync([], TestContext.Current.CancellationToken, arguments);
 

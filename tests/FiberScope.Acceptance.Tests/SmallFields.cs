@@ -9,7 +9,7 @@ public sealed class SmallFields : IAsyncLifetime
 
     public string Folder => _workspace.PathTo("fields");
 
-    public string Field(int number) => _workspace.PathTo("fields", $"field-{number:00}.png");
+    public string Field(int number) => _workspace.PathTo("fields", FormattableString.Invariant($"field-{number:00}.png"));
 
     public async ValueTask InitializeAsync()
     {

@@ -16,6 +16,7 @@ public static class ImageFinder
     {
         var found = ImmutableArray.CreateBuilder<FoundImage>();
         var seen = new HashSet<string>(StringComparer.Ordinal);
+        found.AddRange(group.Given);
         foreach (var pattern in group.Patterns)
         {
             var files = Expand(pattern.Replace('\\', '/'), folder, problems);

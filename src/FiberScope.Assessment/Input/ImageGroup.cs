@@ -6,8 +6,11 @@ namespace FiberScope.Assessment.Input;
 /// <summary>Images that share a scale.</summary>
 public sealed record ImageGroup
 {
-    /// <summary>Paths and globs, relative to the swatch file; at least one.</summary>
+    /// <summary>Paths and globs, relative to the swatch file; empty only when images are given as found.</summary>
     public required ImmutableArray<string> Patterns { get; init; }
+
+    /// <summary>Images that need no finding, such as one from standard input; they come first.</summary>
+    public ImmutableArray<FoundImage> Given { get; init; } = [];
 
     /// <summary>The side of a pixel on the specimen; null when the images must tell it.</summary>
     public Stated<Length>? PixelSize { get; init; }

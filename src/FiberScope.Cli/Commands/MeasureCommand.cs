@@ -38,7 +38,8 @@ internal static class MeasureCommand
 
     private static ImageGroup Group(string[] images, string? pixelSize, string? scaleBar, PipedImage input) => new()
     {
-        Patterns = [.. images.Select(i => i == "-" ? input.Path : i)],
+        Patterns = [.. images.Where(i => i != "-")],
+        Given = images.Contains("-", StringComparer.Ordinal) ? [new FoundImage("standard input", input.Path)] : [],
         PixelSize = pixelSize is null ? null : OptionValue.Length("--pixel-size", pixelSize),
         ScaleBar = scaleBar is null ? null : OptionValue.Length("--scale-bar", scaleBar).Value,
     };
