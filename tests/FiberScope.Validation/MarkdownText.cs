@@ -12,7 +12,7 @@ internal sealed class MarkdownText
     public static string Number(double value, string format = "G4") => value.ToString(format, CultureInfo.InvariantCulture);
 
     /// <summary>A share in per cent.</summary>
-    public static string Percent(double value, string format = "0.0") => (100 * value).ToString(format, CultureInfo.InvariantCulture) + " %";
+    public static string Percent(double value, string format = "0.0") => (100 * value).ToString(format, CultureInfo.InvariantCulture).Replace("-+", "-", StringComparison.Ordinal) + " %";
 
     /// <summary>A relative error with its sign, in per cent.</summary>
     public static string Signed(double value, string format = "+0;-0;0") => (100 * value).ToString(format, CultureInfo.InvariantCulture);

@@ -69,7 +69,7 @@ internal static class Figures
     {
         var ticks = new ScottPlot.TickGenerators.NumericManual(
             [.. Enumerable.Range(0, values.Length).Select(k => (double)k)],
-            [.. values.Select(v => MarkdownText.Number(v, "G3"))]);
+            [.. values.Select(v => v >= 1e4 ? MarkdownText.Number(v, "0E+0") : MarkdownText.Number(v, "0.###"))]);
         axis.TickGenerator = ticks;
     }
 

@@ -1,4 +1,6 @@
 using System.CommandLine;
+using System.Diagnostics;
+using FiberScope.Validation.Filtration.Sections;
 
 namespace FiberScope.Validation.Filtration;
 
@@ -17,9 +19,32 @@ internal static class FiltrationCommand
             {
                 CellTabulator.Write(Console.Out);
             }
+            else
+            {
+                Report(Console.Out);
+            }
 
             return 0;
         });
         return command;
+    }
+
+    private static void Report(TextWriter log)
+    {
+        var clock = Stopwatch.StartNew();
+        var text = new MarkdownText();
+        text.Heading(2, "Filtration").Paragraph($"Written by `dotnet run --project tests/FiberScope.Validation -c Release -- filtration`.");
+        void Run(string name, Action section)
+        {
+            section();
+            log.WriteLine(FormattableString.Invariant($"{clock.Elapsed.TotalSeconds,6:F0} s  {name}"));
+        }
+
+        Run("reference", () => ReferenceSection.Write(text));
+        Run("cell set", () => CellSetSection.Write(text));
+        var grid = ReferenceGrid.Solve();
+        Run("closed forms", () => ClosedFormSection.Write(text, grid));
+        Run("correlation sets", () => SetSection.Write(text, grid));
+        MarkedSection.Write(Repository.Locate("docs", "validation.md"), "filtration", text.ToString(), "Validation");
     }
 }

@@ -33,7 +33,7 @@ internal static class ReferenceSection
         return
         [
             MarkdownText.Number(c.Solidity), MarkdownText.Number(c.Knudsen), MarkdownText.Number(c.Peclet), MarkdownText.Number(c.Ratio),
-            MarkdownText.Number(exact, "G5"), .. errors.Select(e => MarkdownText.Percent((e / exact) - 1, "+0.000;-0.000")),
+            MarkdownText.Number(exact, "G5"), .. errors.Select(e => MarkdownText.Percent((e / exact) - 1, "0.000")),
         ];
     }
 
@@ -45,7 +45,7 @@ internal static class ReferenceSection
         return
         [
             MarkdownText.Number(c.Solidity), MarkdownText.Number(c.Ratio), MarkdownText.Number(c.Stokes), MarkdownText.Number(exact, "G5"),
-            .. new[] { 1e-5, 1e-6, 1e-7, 1e-8 }.Select(t => MarkdownText.Percent((At(t) / exact) - 1, "+0.0000;-0.0000")),
+            .. new[] { 1e-5, 1e-6, 1e-7, 1e-8 }.Select(t => MarkdownText.Percent((At(t) / exact) - 1, "0.0000")),
         ];
     }
 
@@ -71,6 +71,9 @@ internal static class ReferenceSection
         }
 
         var rim = row["rim"] == "flux" ? RimCondition.Flux : RimCondition.Concentration;
-        return DiffusionSolver.Solve(flow, Column("peclet"), Column("ratio"), DiffusionSolver.CellsFor(Column("peclet")), rim);
+        // A concentration held at the rim makes a thin layer there at small Pe, which the grid does not seek out.
+        return Column("peclet") < 3
+            ? DiffusionSolver.Extrapolated(flow, Column("peclet"), Column("ratio"), 64, rim)
+            : DiffusionSolver.Solve(flow, Column("peclet"), Column("ratio"), DiffusionSolver.CellsFor(Column("peclet")), rim);
     }
 }
