@@ -23,7 +23,7 @@ internal static class DiameterFigure
         var bars = new RectangleBarSeries
         {
             Title = "readings, by length",
-            FillColor = OxyColor.FromRgb(0xb9, 0xcd, 0xdd),
+            FillColor = FigureStyle.Bars,
             StrokeColor = OxyColors.White,
             StrokeThickness = 0.8,
         };

@@ -23,6 +23,9 @@ internal static class FigureStyle
     /// <summary>A third thing.</summary>
     public static readonly OxyColor Third = OxyColor.FromRgb(0x1c, 0x8a, 0x73);
 
+    /// <summary>Bars of histograms and rankings.</summary>
+    public static readonly OxyColor Bars = OxyColor.FromRgb(0xa9, 0xc3, 0xd7);
+
     /// <summary>Letters and lines of the scaffolding.</summary>
     public static readonly OxyColor Slate = OxyColor.FromRgb(0x3c, 0x46, 0x50);
 

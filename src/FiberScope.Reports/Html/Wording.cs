@@ -87,6 +87,14 @@ internal static class Wording
     /// <summary>A moment, to the minute, in UTC.</summary>
     public static string Of(DateTimeOffset moment) => moment.UtcDateTime.ToString("yyyy-MM-dd HH:mm 'UTC'", CultureInfo.InvariantCulture);
 
+    /// <summary>A program's name and version with its source revision cut to eight digits.</summary>
+    public static string Software(string software)
+    {
+        const int Digits = 8;
+        var plus = software.IndexOf('+', StringComparison.Ordinal);
+        return plus >= 0 && software.Length > plus + 1 + Digits ? software[..(plus + 1 + Digits)] : software;
+    }
+
     /// <summary>How a solidity was found, in words.</summary>
     public static string Of(SolidityRoute route) => route switch
     {

@@ -14,6 +14,10 @@ internal static class FieldPicture
 {
     private const double TraceStep = 6;
 
+    /// <summary>Bars stand at least this many pixels apart, or this share of the diameter where that is more.</summary>
+    private const double BarStep = 9;
+    private const double BarStepPerDiameter = 0.5;
+
     /// <summary>The picture as an inline SVG element.</summary>
     public static string Svg(FieldMeasurement field, PictureBudget budget)
     {
@@ -23,7 +27,7 @@ internal static class FieldPicture
         svg.Append(CultureInfo.InvariantCulture, $"<svg class=\"field\" xmlns=\"http://www.w3.org/2000/svg\" viewBox=\"0 0 {picture.Width} {picture.Height}\" role=\"img\" aria-label=\"The field with its traces and readings\">");
         svg.Append(CultureInfo.InvariantCulture, $"<image width=\"{picture.Width}\" height=\"{picture.Height}\" preserveAspectRatio=\"none\" href=\"data:image/jpeg;base64,{Convert.ToBase64String(Jpeg(picture, budget))}\"/>");
         Path(svg, "trace", stroke, field.Traces.Select(TraceLine));
-        Path(svg, "reading", stroke * 1.3, field.Readings.Select(ReadingBar));
+        Path(svg, "reading", stroke * 1.3, Spaced(field.Readings).Select(ReadingBar));
         foreach (var kind in field.Defects.Select(d => d.Kind).Distinct().Order())
         {
             Path(svg, "defect " + kind.ToString().ToLowerInvariant(), stroke * 1.6, field.Defects.Where(d => d.Kind == kind).Select(Outline));
@@ -60,6 +64,24 @@ internal static class FieldPicture
         }
 
         return line.ToString();
+    }
+
+    /// <summary>
+    /// Readings far enough apart to be told from each other; where a fibre is read at every pixel, drawing all would hide it.
+    /// </summary>
+    private static IEnumerable<PixelReading> Spaced(IEnumerable<PixelReading> readings)
+    {
+        PixelReading? last = null;
+        foreach (var reading in readings)
+        {
+            if (last is not { } before
+                || before.Trace != reading.Trace
+                || Math.Abs(reading.X - before.X) + Math.Abs(reading.Y - before.Y) >= Math.Max(BarStep, BarStepPerDiameter * reading.Diameter))
+            {
+                last = reading;
+                yield return reading;
+            }
+        }
     }
 
     /// <summary>A bar across the fibre from edge to edge.</summary>

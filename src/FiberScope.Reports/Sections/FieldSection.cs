@@ -20,7 +20,7 @@ internal sealed class FieldSection : IReportSection
     public Markup Render(SwatchAssessment assessment)
     {
         var budget = PictureBudget.For(assessment.Fields.Count());
-        var legend = Markup.Of($"<p class=\"legend\"><span class=\"trace\"></span> trace (centre line) <span class=\"reading\"></span> reading, edge to edge <span class=\"defect\"></span> region left out as a defect <span class=\"excluded\"></span> information strip, excluded</p>");
+        var legend = Markup.Of($"<p class=\"legend\"><span class=\"trace\"></span> trace (centre line) <span class=\"reading\"></span> reading, edge to edge (some of them; all are in readings.csv) <span class=\"defect\"></span> region left out as a defect <span class=\"excluded\"></span> information strip, excluded</p>");
         return Markup.Of($"{legend}{assessment.Layers.SelectMany(layer => layer.Fields.Select(field => Field(field, layer, assessment.Layers.Length > 1, budget)))}");
     }
 

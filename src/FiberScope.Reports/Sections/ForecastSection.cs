@@ -54,7 +54,7 @@ internal sealed class ForecastSection : IReportSection
     {
         var worst = AtMpps(forecast);
         return new Table("figures", "forecast", "value", "measured inputs, 95 %", "spread of the models")
-            .Row("pressure drop", Wording.Of(forecast.PressureDrop), "", "")
+            .Row("pressure drop", Wording.Of(forecast.PressureDrop), "", forecast.PressureDropModelBandPascals is { } drops ? $"{Wording.Number(drops.Low)} to {Wording.Number(drops.High)} Pa" : "–")
             .Row("most-penetrating particle size (MPPS)", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none between 10 nm and 2 µm", "", "")
             .Row("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), worst.MeasurementBand is { } band ? Wording.Percent(band) : "–", Wording.Percent(worst.ModelBand))
             .Row("efficiency at the MPPS", Wording.Percent(1 - forecast.PenetrationAtMostPenetratingSize, 4), "", "")

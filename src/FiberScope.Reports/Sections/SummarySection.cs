@@ -81,9 +81,10 @@ internal sealed class SummarySection : IReportSection
         var at = $"forecast at {Wording.Of(forecast.OperatingPoint.FaceVelocity)}";
         var worst = ForecastSection.AtMpps(forecast);
         var inputs = worst.MeasurementBand is { } band ? $"inputs, 95 %: {Wording.Percent(band, 2)}; " : "";
+        var drop = forecast.PressureDropModelBandPascals is { } drops ? $"models: {Wording.Number(drops.Low)} to {Wording.Number(drops.High)} Pa" : "";
         return Markup.Of(
             $"""
-            {Key("pressure drop", Wording.Of(forecast.PressureDrop), "", at)}
+            {Key("pressure drop", Wording.Of(forecast.PressureDrop), drop, at)}
             {Key("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), $"{inputs}models: {Wording.Percent(worst.ModelBand, 2)}", at)}
             {Key("most-penetrating size", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none in range", "", at)}
             {Key("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} /kPa", "", at)}
@@ -153,7 +154,7 @@ internal sealed class SummarySection : IReportSection
             <div><dt>Fields</dt><dd>{Wording.Count(included)} of {Wording.Count(fields.Length)} used</dd></div>
             <div><dt>Readings</dt><dd>{Wording.Count(assessment.Layers.Sum(l => l.Survey.Readings.Length))} on {Wording.Count(assessment.Layers.Sum(l => l.Survey.FibreCount))} traces</dd></div>
             <div><dt>Pixel size</dt><dd>{string.Join(", ", sizes)} ({string.Join(", ", scales)})</dd></div>
-            <div><dt>Software</dt><dd>{assessment.Recipe.Software}</dd></div>
+            <div><dt>Software</dt><dd>{Wording.Software(assessment.Recipe.Software)}</dd></div>
             <div class="long"><dt>SHA-256 of {assessment.Recipe.SwatchFile}</dt><dd><code>{swatchHash}</code></dd></div>
             </dl>
             """);
