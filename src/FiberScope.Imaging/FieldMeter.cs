@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Imaging.Edges;
 using FiberScope.Imaging.Tracing;
 
 namespace FiberScope.Imaging;
@@ -27,16 +28,17 @@ public static class FieldMeter
         var ribbons = tracer.Run(cancellation);
         var traces = ImmutableArray.CreateBuilder<Trace>();
         var readings = ImmutableArray.CreateBuilder<PixelReading>();
-        foreach (var ribbon in ribbons)
+        var (corrections, priors) = WidthCorrection.Of(ribbons, picture.GreyNoise);
+        foreach (var (ribbon, correction) in ribbons.Zip(corrections))
         {
-            Add(ribbon, traces, readings);
+            Add(ribbon, correction, traces, readings);
         }
 
-        var blur = ribbons.Count == 0 ? 0 : Series.Median([.. ribbons.Select(r => StripLook.Blur(r.Strip))]);
+        var blur = ribbons.Count == 0 ? 0 : priors.Blur;
         return Result(micrograph, traces.ToImmutable(), readings.ToImmutable(), tracer.Judge.Refused.ToImmutableSortedDictionary(), blur);
     }
 
-    private static void Add(Ribbon ribbon, ImmutableArray<Trace>.Builder traces, ImmutableArray<PixelReading>.Builder readings)
+    private static void Add(Ribbon ribbon, Correction correction, ImmutableArray<Trace>.Builder traces, ImmutableArray<PixelReading>.Builder readings)
     {
         var strip = ribbon.Strip;
         var id = traces.Count;
@@ -48,7 +50,7 @@ public static class FieldMeter
             {
                 var direction = Math.Atan2(strip.Nx[r], -strip.Ny[r]);
                 direction -= Math.PI * Math.Floor(direction / Math.PI);
-                readings.Add(new PixelReading(strip.X[r] + 0.5, strip.Y[r] + 0.5, direction, ribbon.Widths[r], 0.3, strip.Step, id));
+                readings.Add(new PixelReading(strip.X[r] + 0.5, strip.Y[r] + 0.5, direction, Math.Max(0.5, ribbon.Widths[r] - correction.Excess), correction.Uncertainty, strip.Step, id));
             }
         }
     }

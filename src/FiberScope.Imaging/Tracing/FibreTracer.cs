@@ -7,12 +7,13 @@ internal sealed class FibreTracer
     private readonly StabilisedPicture _picture;
     private readonly RibbonTracker[] _trackers;
     private readonly double _widest;
+    private EdgeMap? _finest;
 
     public FibreTracer(StabilisedPicture picture, TracingSettings settings, double widest)
     {
         (_picture, _settings, _widest) = (picture, settings, widest);
         _trackers = [.. picture.Levels.Select((level, l) => new RibbonTracker(level, l, picture.Noise[l], settings.InsideWeight))];
-        Judge = new RibbonJudge(settings, picture.LinearNoise);
+        Judge = new RibbonJudge(settings, picture.GreyNoise);
     }
 
     public RibbonJudge Judge { get; }
@@ -42,6 +43,7 @@ internal sealed class FibreTracer
         {
             cancellation.ThrowIfCancellationRequested();
             var map = EdgeMap.Of(_picture.Levels[l], _picture.Noise[l], _settings.SmoothingAlong, _settings.EdgeSignificance);
+            _finest ??= map;
             var narrowest = l == 0 ? (float)_settings.Narrowest : NarrowestHigher;
             var last = l == _picture.Levels.Length - 1;
             seeds.AddRange(SeedFinder.Find(map, l, narrowest, last ? 2 * Widest : Widest, _settings.InsideWeight, _settings.SeedSignificance));
@@ -72,7 +74,9 @@ internal sealed class FibreTracer
         }
 
         var rival = Rival(track, seed.Level, width);
-        return rival < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width) is { } strip ? Judge.Judge(strip, rival) : null;
+        return rival < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width) is { } strip
+            ? Judge.Judge(strip, rival, InsideTexture.Of(strip, _finest!))
+            : null;
     }
 
     /// <summary>The score of the best wider ribbon that shares one of the edges, over the track's own.</summary>

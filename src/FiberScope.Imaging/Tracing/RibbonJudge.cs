@@ -1,14 +1,14 @@
 namespace FiberScope.Imaging.Tracing;
 
 /// <summary>Decides where a straightened fibre may be read, and whether it is one fibre at all.</summary>
-internal sealed class RibbonJudge(TracingSettings settings, double noise)
+internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
 {
     private readonly SortedDictionary<string, int> _refused = new(StringComparer.Ordinal);
 
     /// <summary>How many stations were refused, by reason.</summary>
     public IReadOnlyDictionary<string, int> Refused => _refused;
 
-    public Ribbon? Judge(RibbonStrip strip, double rival)
+    public Ribbon? Judge(RibbonStrip strip, double rival, double[] texture)
     {
         var rows = strip.Rows;
         var width = 2 * Series.Median([.. Enumerable.Range(0, rows).Select(r => strip.Half[r])]);
@@ -16,7 +16,7 @@ internal sealed class RibbonJudge(TracingSettings settings, double noise)
         var accepted = new bool[rows];
         for (var r = 0; r < rows; r++)
         {
-            var reason = Reason(strip, looks, r, width);
+            var reason = texture[r] > settings.LargestTexture ? "edges-across-inside" : Reason(strip, looks, r, width);
             accepted[r] = reason is null;
             Count(reason);
         }
@@ -68,7 +68,7 @@ internal sealed class RibbonJudge(TracingSettings settings, double noise)
         var (low, high) = (Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]), Math.Max(looks.ContrastLeft[r], looks.ContrastRight[r]));
         var found = strip.Left.Offset[r] + strip.Right.Offset[r];
         return !strip.Left.Found[r] || !strip.Right.Found[r] || found < 1.5 ? "no-edge"
-            : low < settings.LeastFlankRatio * high || low < settings.FlankSignificance * noise / Math.Max(1, 0.3 * width) ? "one-edge-hidden"
+            : low < settings.LeastFlankRatio * high || low < settings.FlankSignificance * noise.At(looks.Peak[r]) / Math.Max(1, 0.3 * width) ? "one-edge-hidden"
             : Math.Abs(strip.Right.Offset[r] - strip.Left.Offset[r]) > 0.4 * found ? "off-centre"
             : looks.Swing[r] >= settings.LargestSwing ? "edge-inside"
             : looks.Middle[r] - looks.Outside[r] <= settings.LeastSolid * Math.Max(looks.Peak[r] - looks.Outside[r], 1e-6) ? "dark-middle"

@@ -15,8 +15,8 @@ internal sealed class RibbonTracker
     private readonly float _scale;
     private readonly float _noise;
     private readonly float _insideWeight;
-    private readonly float[] _profile = new float[128];
-    private readonly float[] _slope = new float[128];
+    private readonly float[] _profile = new float[256];
+    private readonly float[] _slope = new float[256];
 
     public RibbonTracker(Plane level, int index, double noise, double insideWeight)
     {
@@ -115,7 +115,7 @@ internal sealed class RibbonTracker
     private State Measure(State at)
     {
         var half = at.HalfWidth;
-        var reach = Math.Min((_profile.Length - 1) / 2, (int)MathF.Ceiling(((1.3f * half) + 3f) / SampleStep));
+        var reach = Math.Min((_profile.Length / 2) - 1, (int)MathF.Ceiling(((1.3f * half) + 3f) / SampleStep));
         var count = (2 * reach) + 1;
         Average(at, reach, count);
         Smooth(count);
@@ -206,7 +206,7 @@ internal sealed class RibbonTracker
 
     private float Inside(int reach, float left, float right)
     {
-        var margin = Math.Max(1.8f, 0.2f * (right - left));
+        var margin = Math.Max(2.2f, 0.2f * (right - left));
         var from = (int)MathF.Ceiling((left + margin) / SampleStep) + reach;
         var to = (int)MathF.Floor((right - margin) / SampleStep) + reach;
         var worst = 0f;

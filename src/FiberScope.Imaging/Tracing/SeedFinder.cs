@@ -33,37 +33,46 @@ internal static class SeedFinder
     private static Seed? Best(EdgeMap map, EdgePoint from, int level, float narrowest, float widest, float insideWeight)
     {
         Seed? best = null;
-        var inside = 0f;
-        for (var t = 1.5f; t < widest + 1; t += 0.5f)
+        Span<float> inside = stackalloc float[(int)(2 * widest) + 4];
+        for (var k = 2; k < (2 * widest) + 2; k++)
         {
-            var (x, y) = (from.X + (t * from.Nx), from.Y + (t * from.Ny));
-            var (i, j) = ((int)MathF.Round(x), (int)MathF.Round(y));
+            var t = 0.5f * k;
+            var (i, j) = ((int)MathF.Round(from.X + (t * from.Nx)), (int)MathF.Round(from.Y + (t * from.Ny)));
             if (i < 2 || j < 2 || i >= map.Strength.Width - 2 || j >= map.Strength.Height - 2)
             {
                 break;
             }
 
+            inside[k] = Lateral(map, i, j, from);
             if (map.Index[(j * map.Strength.Width) + i] is var other and >= 0)
             {
                 var to = map.Points[other];
                 var width = ((to.X - from.X) * from.Nx) + ((to.Y - from.Y) * from.Ny);
                 if ((to.Nx * from.Nx) + (to.Ny * from.Ny) < Facing && width >= narrowest && width <= widest)
                 {
-                    var score = Math.Min(from.Strength, to.Strength) - (insideWeight * inside);
+                    var score = Math.Min(from.Strength, to.Strength) - (insideWeight * Strongest(inside, width));
                     if (score > (best?.Score ?? 0))
                     {
                         best = Between(from, to, score, level);
                     }
                 }
             }
-
-            if (t > Math.Max(2f, 0.2f * widest))
-            {
-                inside = Math.Max(inside, Lateral(map, i, j, from));
-            }
         }
 
         return best;
+    }
+
+    /// <summary>The strongest lateral edge between two edges, clear of both flanks and of the rims beside them.</summary>
+    private static float Strongest(ReadOnlySpan<float> inside, float width)
+    {
+        var margin = Math.Max(2.2f, 0.2f * width);
+        var strongest = 0f;
+        for (var k = (int)MathF.Ceiling(2 * margin); k <= (int)(2 * (width - margin)); k++)
+        {
+            strongest = Math.Max(strongest, inside[k]);
+        }
+
+        return strongest;
     }
 
     private static Seed Between(EdgePoint from, EdgePoint to, float score, int level)

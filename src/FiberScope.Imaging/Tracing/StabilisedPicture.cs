@@ -27,6 +27,9 @@ internal sealed class StabilisedPicture
     /// <summary>The standard deviation of the noise of <see cref="Linear"/>.</summary>
     public double LinearNoise { get; }
 
+    /// <summary>How noisy the linear picture is at a brightness.</summary>
+    public GreyNoise GreyNoise => new(LinearNoise, Noise[0]);
+
     /// <summary>Electron counts are Poisson: the square root makes their noise even (Bartlett 1936).</summary>
     public static StabilisedPicture? From(Micrograph micrograph, double widest)
     {

@@ -34,17 +34,19 @@ internal sealed class StripLook
     /// <summary>Difference of the outside levels over the contrast.</summary>
     public double[] Asymmetry { get; }
 
-    public static StripLook Of(RibbonStrip strip, double width, double noise)
+    public static StripLook Of(RibbonStrip strip, double width, GreyNoise noise)
     {
         var look = new StripLook(strip.Rows);
         var swing = new double[strip.Rows];
-        var slopeNoise = noise / Math.Sqrt(2 * Math.Sqrt(Math.PI) * Math.Max(0.7, 0.46 * width)) / Math.Sqrt(4 * Math.Sqrt(Math.PI) * Math.Pow(Math.Max(0.6, Math.Max(0.5, 0.015 * width)), 3));
+        var slopes = new float[strip.Slope.Length];
+        Series.SmoothRows(strip.Slope, slopes, strip.Rows, strip.Columns, Math.Max(0.5, 0.35 * width / strip.Step));
         var blur = Blur(strip);
         var clear = Math.Clamp(1 - (2 * blur / (0.5 * width)), 0, 0.6);
         for (var r = 0; r < strip.Rows; r++)
         {
             look.Levels(strip, r, width);
-            swing[r] = clear * width > 2.5 ? Math.Max(0, Largest(strip, r, clear) - (3 * slopeNoise)) : 0;
+            var slopeNoise = noise.At(look.Peak[r]) * GreyNoise.SlopeShare(0.46 * width, Math.Max(0.5, 0.015 * width));
+            swing[r] = clear * width > 2.5 ? Math.Max(0, Largest(strip, slopes, r, clear) - (3 * slopeNoise)) : 0;
         }
 
         var smooth = Series.Smooth(swing, Math.Max(0.7, 0.4 * width / strip.Step));
@@ -100,7 +102,7 @@ internal sealed class StripLook
         return sign * best;
     }
 
-    private static double Largest(RibbonStrip strip, int r, double clear)
+    private static double Largest(RibbonStrip strip, float[] slopes, int r, double clear)
     {
         var centre = 0.5 * (strip.Right.Offset[r] - strip.Left.Offset[r]);
         var half = 0.5 * (strip.Right.Offset[r] + strip.Left.Offset[r]);
@@ -108,7 +110,7 @@ internal sealed class StripLook
         double low = double.PositiveInfinity, high = double.NegativeInfinity, climb = 0, drop = 0;
         for (var c = from; c <= to; c++)
         {
-            double value = strip.Slope[(r * strip.Columns) + c];
+            double value = slopes[(r * strip.Columns) + c];
             low = Math.Min(low, value);
             high = Math.Max(high, value);
             climb = Math.Max(climb, value - low);

@@ -37,6 +37,10 @@ public sealed record TracingSettings
     /// <remarks>Near zero for a flat top, a dome or bright rims; large for two fibres side by side.</remarks>
     public double LargestSwing { get; init => field = Require.Within(value, 0, 2); } = 0.32;
 
+    /// <summary>The largest share of the inside of a wide fibre that may be crossed by strong edges; 0 to 1. Default 0.12.</summary>
+    /// <remarks>A mat of thin fibres seen from afar can look like a wide one; close to, its inside is full of edges.</remarks>
+    public double LargestTexture { get; init => field = Require.Within(value, 0, 1); } = 0.12;
+
     /// <summary>How far a reading may stand from the running median of its trace, as a share of it; 0.01 to 1. Default 0.1.</summary>
     public double LargestStep { get; init => field = Require.Within(value, 0.01, 1); } = 0.1;
 
