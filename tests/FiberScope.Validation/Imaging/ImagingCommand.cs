@@ -53,7 +53,22 @@ internal static class ImagingCommand
             Console.WriteLine(brief ? Diagnosis.Line(check) : Diagnosis.Of(check));
             var method = quick ? "quick" : "product";
             FigureStore.Save($"{(reporting ? "report" : "dev")}-{recipe.Name}-{method}", FamilyFigures.Of(check, method, reporting));
+            if (!quick)
+            {
+                Defects(check, reporting, brief);
+            }
+
             SavePictures(check, pictures);
+        }
+    }
+
+    private static void Defects(FamilyCheck check, bool reporting, bool brief)
+    {
+        var defects = DefectCheck.Of(check);
+        FigureStore.Save($"{(reporting ? "report" : "dev")}-{check.Family.Name}-defects", defects);
+        foreach (var row in defects.Where(d => !brief && (d.TrueShare > 0 || d.ReadShare > 0)))
+        {
+            Console.WriteLine(FormattableString.Invariant($"  {row.Kind}: area share true {row.TrueShare:0.00 %} flagged {row.ReadShare:0.00 %}, {row.Found:0 %} of {row.TrueCount} found, {row.ReadingsOn} readings on it"));
         }
     }
 

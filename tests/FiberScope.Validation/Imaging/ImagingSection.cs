@@ -20,6 +20,7 @@ internal static class ImagingSection
         Table(text, "### What the measurement reaches", product);
         text.AppendLine("![Distributions read and true](figures/imaging-distributions.png)\n");
         Orientation(text, product);
+        Defects(text);
         Table(text, "### The quick way on the same pictures", quick);
         Coverage(text);
         Invariance(text);
@@ -87,6 +88,28 @@ internal static class ImagingSection
         {
             var direction = double.IsFinite(f.DirectionError) ? Mark(f.DirectionError.ToString("+0.0°;-0.0°", CultureInfo.InvariantCulture), Math.Abs(f.DirectionError) <= 2) : "";
             text.AppendLine(CultureInfo.InvariantCulture, $"| {f.Family} | {Mark(f.OrderError.ToString("+0.000;-0.000", CultureInfo.InvariantCulture), Math.Abs(f.OrderError) <= 0.03)} | {direction} |");
+        }
+
+        text.AppendLine();
+    }
+
+    private static void Defects(StringBuilder text)
+    {
+        var families = SpecimenFamilies.All.Select(f => FigureStore.Load<DefectFigures[]>($"report-{f.Name}-defects")).OfType<DefectFigures[]>().ToArray();
+        if (families.Length == 0)
+        {
+            return;
+        }
+
+        text.AppendLine("### Defects\n");
+        text.AppendLine("Area share of what is no single fibre, where it is uppermost (bar: 20 % of the true share); found are true defects of 300 pixels or more that a flagged region covers by a quarter at least. In a clean family everything flagged is false (bar: 2 % of the field).\n");
+        text.AppendLine("| family | kind | true share | flagged share | found | readings on it |\n| --- | --- | --- | --- | --- | --- |");
+        foreach (var row in families.SelectMany(f => f).Where(d => d.Kind == "all" || d.TrueShare > 0))
+        {
+            var isClean = row.TrueShare == 0;
+            var isMet = isClean ? row.ReadShare <= 0.02 : Math.Abs(row.ReadShare - row.TrueShare) <= 0.2 * row.TrueShare;
+            var found = row.TrueCount > 0 ? FormattableString.Invariant($"{row.Found * row.TrueCount:0} of {row.TrueCount}") : "";
+            text.AppendLine(CultureInfo.InvariantCulture, $"| {row.Family} | {row.Kind} | {row.TrueShare:0.00 %} | {Mark(row.ReadShare.ToString("0.00 %", CultureInfo.InvariantCulture), isMet)} | {found} | {(isClean ? "" : row.ReadingsOn.ToString(CultureInfo.InvariantCulture))} |");
         }
 
         text.AppendLine();
