@@ -1,4 +1,3 @@
-using FiberScope.Imaging;
 using FiberScope.Specimens;
 using OpenCvSharp;
 
