@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Diagnostics;
+using FiberScope.Validation.Filtration.Measured;
 using FiberScope.Validation.Filtration.Sections;
 
 namespace FiberScope.Validation.Filtration;
@@ -12,12 +13,20 @@ internal static class FiltrationCommand
     {
         var command = new Command("filtration", "Compare the filtration model with the numerical cell solution and with measured media.");
         var tabulate = new Option<bool>("--tabulate") { Description = "Solve the cell anew and rewrite the tables of the set 'cell' (minutes)." };
+        var media = new Option<bool>("--media") { Description = "Only compare with the measured media, and print instead of writing." };
         command.Add(tabulate);
+        command.Add(media);
         command.SetAction(parsed =>
         {
             if (parsed.GetValue(tabulate))
             {
                 CellTabulator.Write(Console.Out);
+            }
+            else if (parsed.GetValue(media))
+            {
+                var text = new MarkdownText();
+                Media(text);
+                Console.Out.WriteLine(text.ToString());
             }
             else
             {
@@ -27,6 +36,12 @@ internal static class FiltrationCommand
             return 0;
         });
         return command;
+    }
+
+    private static void Media(MarkdownText text)
+    {
+        var stacks = MeasuredStack.ReadAll();
+        UnfittedSection.Write(text, stacks);
     }
 
     private static void Report(TextWriter log)
@@ -45,6 +60,7 @@ internal static class FiltrationCommand
         var grid = ReferenceGrid.Solve();
         Run("closed forms", () => ClosedFormSection.Write(text, grid));
         Run("correlation sets", () => SetSection.Write(text, grid));
+        Run("measured media", () => Media(text));
         MarkedSection.Write(Repository.Locate("docs", "validation.md"), "filtration", text.ToString(), "Validation");
     }
 }
