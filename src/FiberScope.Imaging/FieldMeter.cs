@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using FiberScope.Imaging.Edges;
+using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Tracing;
 
 namespace FiberScope.Imaging;
@@ -21,7 +22,7 @@ public static class FieldMeter
         var widest = tracing.WidestShare * Math.Min(micrograph.Width, micrograph.UsableHeight);
         if (StabilisedPicture.From(micrograph, widest) is not { } picture)
         {
-            return Result(micrograph, [], [], ImmutableSortedDictionary<string, int>.Empty, 0);
+            return Result(micrograph, settings, [], [], ImmutableSortedDictionary<string, int>.Empty, 0);
         }
 
         var tracer = new FibreTracer(picture, tracing, widest);
@@ -35,7 +36,7 @@ public static class FieldMeter
         }
 
         var blur = ribbons.Count == 0 ? 0 : priors.Blur;
-        return Result(micrograph, traces.ToImmutable(), readings.ToImmutable(), tracer.Judge.Refused.ToImmutableSortedDictionary(), blur);
+        return Result(micrograph, settings, traces.ToImmutable(), readings.ToImmutable(), tracer.Judge.Refused.ToImmutableSortedDictionary(), blur);
     }
 
     private static void Add(Ribbon ribbon, Correction correction, ImmutableArray<Trace>.Builder traces, ImmutableArray<PixelReading>.Builder readings)
@@ -56,10 +57,10 @@ public static class FieldMeter
     }
 
     private static FieldMeasurement Result(
-        Micrograph micrograph, ImmutableArray<Trace> traces, ImmutableArray<PixelReading> readings, ImmutableSortedDictionary<string, int> rejected, double blur) => new()
+        Micrograph micrograph, MeasurementSettings settings, ImmutableArray<Trace> traces, ImmutableArray<PixelReading> readings, ImmutableSortedDictionary<string, int> rejected, double blur) => new()
     {
         Micrograph = micrograph,
-        Fitness = new FieldFitness([]),
+        Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = readings }, settings.Fitness),
         Traces = traces,
         Readings = readings,
         Rejected = rejected,

@@ -1,3 +1,4 @@
+using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Tracing;
 
 namespace FiberScope.Imaging;
@@ -7,4 +8,7 @@ public sealed record MeasurementSettings
 {
     /// <summary>How fibres are found and read.</summary>
     public TracingSettings Tracing { get; init; } = new();
+
+    /// <summary>When a field is unfit for measuring.</summary>
+    public FitnessSettings Fitness { get; init; } = new();
 }
