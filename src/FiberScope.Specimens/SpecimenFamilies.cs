@@ -111,8 +111,8 @@ public static class SpecimenFamilies
     private static SpecimenRecipe Family(string name, double pixelMicrometres) => new()
     {
         Name = name,
-        WidthPixels = 1536,
-        HeightPixels = 1152,
+        WidthPixels = 1280,
+        HeightPixels = 960,
         PixelSize = Length.FromMicrometers(pixelMicrometres),
         Mat = new MatRecipe { Fibres = [] },
     };

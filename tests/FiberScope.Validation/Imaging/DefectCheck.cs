@@ -48,7 +48,7 @@ internal static class DefectCheck
         return rows;
     }
 
-    private static byte At(Specimen specimen, CheckedReading reading)
+    private static byte At(SpecimenCase specimen, CheckedReading reading)
     {
         var (x, y) = ((int)reading.X, (int)reading.Y);
         return x >= 0 && y >= 0 && x < specimen.Width && y < specimen.Recipe.FieldRows ? specimen.DefectMask[(y * specimen.Width) + x] : (byte)0;
@@ -67,7 +67,7 @@ internal static class DefectCheck
         return mask;
     }
 
-    private static double Covered(Specimen specimen, byte[] mask, TrueDefect defect)
+    private static double Covered(SpecimenCase specimen, byte[] mask, TrueDefect defect)
     {
         using var canvas = new Mat(specimen.Recipe.FieldRows, specimen.Width, MatType.CV_8UC1, Scalar.Black);
         Cv2.FillPoly(canvas, [defect.Outline.Select(p => new Point((int)p.X, (int)p.Y))], new Scalar(1));

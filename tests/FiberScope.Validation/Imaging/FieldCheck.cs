@@ -6,10 +6,10 @@ namespace FiberScope.Validation.Imaging;
 /// <summary>One field measured, each reading beside the truth.</summary>
 internal sealed class FieldCheck
 {
-    private FieldCheck(Specimen specimen, FieldMeasurement? measurement, CheckedReading[] readings, bool[] isRead, TimeSpan time) =>
+    private FieldCheck(SpecimenCase specimen, FieldMeasurement? measurement, CheckedReading[] readings, bool[] isRead, TimeSpan time) =>
         (Specimen, Measurement, Readings, IsRead, Time) = (specimen, measurement, readings, isRead, time);
 
-    public Specimen Specimen { get; }
+    public SpecimenCase Specimen { get; }
 
     /// <summary>The whole measurement; null for the quick way.</summary>
     public FieldMeasurement? Measurement { get; }
@@ -21,7 +21,7 @@ internal sealed class FieldCheck
 
     public TimeSpan Time { get; }
 
-    public static FieldCheck Of(Specimen specimen, FieldMeasurement? measurement, IReadOnlyList<PixelReading> readings, int field, TimeSpan time)
+    public static FieldCheck Of(SpecimenCase specimen, FieldMeasurement? measurement, IReadOnlyList<PixelReading> readings, int field, TimeSpan time)
     {
         var index = new TruthIndex(specimen.Truth);
         var isSection = specimen.Recipe.Kind == SpecimenKind.CrossSection;

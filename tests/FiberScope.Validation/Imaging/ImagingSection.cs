@@ -35,7 +35,7 @@ internal static class ImagingSection
         text.AppendLine("## Fibre diameters on virtual specimens\n");
         text.AppendLine("Written by `dotnet run -c Release --project tests/FiberScope.Validation -- imaging`; do not edit by hand.\n");
         text.AppendLine(CultureInfo.InvariantCulture, $"""
-            Algorithm `{FieldMeter.Algorithm}`. Every family is a recipe of a mat and of a picture of it ({product.FirstOrDefault()?.Fields ?? 0} fields of 1536 × 1152 pixels each, varied from
+            Algorithm `{FieldMeter.Algorithm}`. Every family is a recipe of a mat and of a picture of it ({product.FirstOrDefault()?.Fields ?? 0} fields of 1280 × 960 pixels each, varied from
             field to field in rim height, shading, blur, noise, focus and contrast). Fields used while tuning and fields reported here have different
             seeds. The truth is the **visible length-weighted distribution**: all centre-line length whose uppermost surface is the fibre's own and that
             stands out of the noise, whether or not both edges show. Errors are relative, pooled over a family's fields; *gross* are readings off by more

@@ -31,7 +31,7 @@ internal static class SpecimenSheet
         sheet.SaveAsPng(path, new PngEncoder { ColorType = PngColorType.Grayscale, CompressionLevel = PngCompressionLevel.BestCompression });
     }
 
-    private static void Place(Specimen specimen, Image<L8> sheet, int left, int top)
+    private static void Place(SpecimenCase specimen, Image<L8> sheet, int left, int top)
     {
         for (var y = 0; y < PieceHeight; y++)
         {
