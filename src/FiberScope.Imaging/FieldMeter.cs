@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using FiberScope.Imaging.Edges;
 using FiberScope.Imaging.Fitness;
+using FiberScope.Imaging.Selection;
 using FiberScope.Imaging.Tracing;
 
 namespace FiberScope.Imaging;
@@ -30,31 +31,19 @@ public static class FieldMeter
         var traces = ImmutableArray.CreateBuilder<Trace>();
         var readings = ImmutableArray.CreateBuilder<PixelReading>();
         var (corrections, priors) = WidthCorrection.Of(ribbons, picture.GreyNoise);
+        var blur = ribbons.Count == 0 ? 0 : priors.Blur;
+        var detection = SelectionStage.Curve(micrograph, picture, ribbons, corrections, blur, tracing, cancellation);
         foreach (var (ribbon, correction) in ribbons.Zip(corrections))
         {
-            Add(ribbon, correction, traces, readings);
+            readings.AddRange(RibbonReadings.Of(ribbon, correction, detection, traces.Count));
+            traces.Add(new Trace(traces.Count, CentreLine(ribbon)));
         }
 
-        var blur = ribbons.Count == 0 ? 0 : priors.Blur;
         return Result(micrograph, settings, traces.ToImmutable(), readings.ToImmutable(), tracer.Judge.Refused.ToImmutableSortedDictionary(), blur);
     }
 
-    private static void Add(Ribbon ribbon, Correction correction, ImmutableArray<Trace>.Builder traces, ImmutableArray<PixelReading>.Builder readings)
-    {
-        var strip = ribbon.Strip;
-        var id = traces.Count;
-        var points = Enumerable.Range(0, strip.Rows).Select(r => new TracePoint(strip.X[r] + 0.5, strip.Y[r] + 0.5, ribbon.Width / 2));
-        traces.Add(new Trace(id, [.. points]));
-        for (var r = 0; r < strip.Rows; r++)
-        {
-            if (ribbon.Accepted[r])
-            {
-                var direction = Math.Atan2(strip.Nx[r], -strip.Ny[r]);
-                direction -= Math.PI * Math.Floor(direction / Math.PI);
-                readings.Add(new PixelReading(strip.X[r] + 0.5, strip.Y[r] + 0.5, direction, Math.Max(0.5, ribbon.Widths[r] - correction.Excess), correction.Uncertainty, strip.Step, id));
-            }
-        }
-    }
+    private static ImmutableArray<TracePoint> CentreLine(Ribbon ribbon) =>
+        [.. Enumerable.Range(0, ribbon.Strip.Rows).Select(r => new TracePoint(ribbon.Strip.X[r] + 0.5, ribbon.Strip.Y[r] + 0.5, ribbon.Width / 2))];
 
     private static FieldMeasurement Result(
         Micrograph micrograph, MeasurementSettings settings, ImmutableArray<Trace> traces, ImmutableArray<PixelReading> readings, ImmutableSortedDictionary<string, int> rejected, double blur) => new()
