@@ -30,9 +30,17 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         }
 
         var median = Runs.Median(widths, accepted, 3 * width / strip.Step);
+        // Half a pixel of edge noise over the length of the line is no taper.
+        var largestTaper = settings.LargestTaper + (0.5 / (WidthTaper.Reach(strip.Step, width) * strip.Step));
+        var taper = WidthTaper.Of(widths, accepted, strip.Step, width);
         for (var r = 0; r < rows; r++)
         {
-            if (accepted[r] && Math.Abs(widths[r] - median[r]) > (settings.LargestStep * median[r]) + 0.4)
+            if (accepted[r] && Math.Abs(taper[r]) > largestTaper)
+            {
+                accepted[r] = false;
+                Count("edges-not-parallel");
+            }
+            else if (accepted[r] && Math.Abs(widths[r] - median[r]) > (settings.LargestStep * median[r]) + 0.4)
             {
                 accepted[r] = false;
                 Count("uneven-width");
