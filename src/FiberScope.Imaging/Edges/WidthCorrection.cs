@@ -17,6 +17,9 @@ internal sealed class WidthCorrection
     /// <summary>What the rim law itself leaves open, as a share of the blur: measured on other laws (tests of the edge model).</summary>
     private const double LawUncertainty = 0.1;
 
+    /// <summary>The share of pixel noise left after sampling between four pixels, mean over all places: the variance keeps (2/3)².</summary>
+    private const double BilinearShare = 2.0 / 3;
+
     private readonly List<FibreProfile?> _profiles;
 
     private WidthCorrection(List<FibreProfile?> profiles) => _profiles = profiles;
@@ -47,11 +50,15 @@ internal sealed class WidthCorrection
         var step = Math.Max(0.25, width / 48);
         var reach = (int)(((0.5 * width) + Math.Min(8, Math.Max(3.5, 0.4 * width))) / step);
         var values = new double[(2 * reach) + 1];
+
+        // Rows are laid on the fibre's smooth course: laid on their own noisy edges they would fake a sharper edge at the wrong place.
+        double[] offsets = [.. Enumerable.Range(0, strip.Rows).Select(r => 0.5 * (strip.Right.Offset[r] - strip.Left.Offset[r]))];
+        var centres = Runs.Median(offsets, ribbon.Accepted, 4 * width / strip.Step);
         var used = 0;
         for (var i = 0; i < rows.Length; i += stride, used++)
         {
             var r = rows[i];
-            var centre = 0.5 * (strip.Right.Offset[r] - strip.Left.Offset[r]);
+            var centre = centres[r];
             var stretch = Math.Clamp(ribbon.Widths[r] / width, 0.9, 1.1);
             for (var c = -reach; c <= reach; c++)
             {
@@ -64,7 +71,7 @@ internal sealed class WidthCorrection
             values[c] /= used;
         }
 
-        return new FibreProfile(values, -reach * step, step, noise.At(values[reach]) / Math.Sqrt(used), -0.5 * width, 0.5 * width);
+        return new FibreProfile(values, -reach * step, step, BilinearShare * noise.At(values[reach]) / Math.Sqrt(used), -0.5 * width, 0.5 * width);
     }
 
     private static double Raw(RibbonStrip strip, int row, double offset)
