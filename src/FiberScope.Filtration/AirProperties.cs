@@ -62,6 +62,15 @@ public sealed record AirProperties
 
     internal double KilogramsPerCubicMetre { get; }
 
+    /// <summary>Mean free path by Kim et al. (2005) and ISO 15900: 67.30 nm (T/296.15)² (p₀/p) (296.15 + 110.4)/(T + 110.4) (from memory).</summary>
+    /// <remarks>Belongs with <see cref="SlipCorrection.Kim"/>; within 0.1 % of the one that the forecast uses.</remarks>
+    public static Length MeanFreePathByKim(AirState state)
+    {
+        const double Reference = 296.15;
+        var ratio = state.Temperature.Kelvins / Reference;
+        return Length.FromNanometers(67.30 * ratio * ratio * (ReferencePascals / state.Pressure.Pascals) * (Reference + SutherlandKelvins) / (state.Temperature.Kelvins + SutherlandKelvins));
+    }
+
     /// <summary>The properties of air in a state.</summary>
     /// <remarks>
     /// Viscosity by Sutherland's law, 1.458·10⁻⁶ T^1.5 / (T + 110.4), the same at 0.1 to 10 atm; mean free path

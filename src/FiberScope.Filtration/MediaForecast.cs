@@ -32,6 +32,21 @@ public sealed record MediaForecast
     /// <summary>Quality factor −ln P / Δp at the most-penetrating size; 1/Pa.</summary>
     public required double QualityFactorPerPascal { get; init; }
 
+    /// <summary>Lowest and highest most-penetrating size by the published sets; null where a set has none.</summary>
+    public LengthInterval? MostPenetratingSizeModelBand { get; init; }
+
+    /// <summary>Lowest and highest penetration at each set's own most-penetrating size, by the published sets; dimensionless.</summary>
+    public Interval? PenetrationAtMostPenetratingSizeModelBand { get; init; }
+
+    /// <summary>What the uncertain inputs leave open; null when no uncertainties were given.</summary>
+    public MeasurementUncertainty? Uncertainty { get; init; }
+
+    /// <summary>Share of the air that goes past the medium at its edge; dimensionless, zero without a gap.</summary>
+    public double EdgeLeakShare { get; init; }
+
+    /// <summary>Share of each layer's air that goes through its holes; dimensionless, in the order of the layers.</summary>
+    public ImmutableArray<double> HoleShares { get; init; } = [];
+
     /// <summary>What a reader must know: ranges left, models that do not apply.</summary>
     public required ImmutableArray<Caveat> Caveats { get; init; }
 }

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using FiberScope.Fibres;
 using FiberScope.Statistics;
 using UnitsNet;
@@ -24,4 +25,25 @@ public sealed record MediaLayer
     /// model into Davies' law for real pads. It divides drag and non-inertial efficiency alike in every correlation set.
     /// </summary>
     public double? InhomogeneityFactor { get; init => field = value is { } given ? Require.Positive(given, nameof(InhomogeneityFactor)) : null; }
+
+    /// <summary>The layer's charge; null for none (as discharged).</summary>
+    public FibreCharge? Charge { get; init; }
+
+    /// <summary>
+    /// Coefficient of variation of the local basis weight, from place to place; dimensionless, 0 to 0.9. Thin places let more air through,
+    /// and more particles with it.
+    /// </summary>
+    public double BasisWeightVariation { get; init => field = Require.Within(value, 0, 0.9, nameof(BasisWeightVariation)); }
+
+    /// <summary>Share of the area that point bonds or film close; dimensionless, 0 to below 1.</summary>
+    public double BondedArea { get; init => field = Require.Within(value, 0, 0.95, nameof(BondedArea)); }
+
+    /// <summary>Holes through the layer; empty for none.</summary>
+    public ImmutableArray<Pinholes> Holes { get; init; } = [];
+
+    /// <summary>The openings between its fibres; null leaves straining out.</summary>
+    public MatOpenings? Openings { get; init; }
+
+    /// <summary>How well the layer's structure is known; null when nothing is said.</summary>
+    public LayerUncertainty? Uncertainty { get; init; }
 }

@@ -1,6 +1,8 @@
 using System.Collections.Immutable;
 using FiberScope.Fibres;
 using FiberScope.Filtration.Correlations;
+using FiberScope.Filtration.Passage;
+using FiberScope.Filtration.Uncertainty;
 using FiberScope.Statistics;
 using UnitsNet;
 
@@ -34,22 +36,28 @@ public static class MediaModel
         var particles = point.Particles.IsDefaultOrEmpty ? DefaultParticles : [.. point.Particles.Order()];
         var media = SingleFibreModel.Published.Append(settings.Correlations).Distinct().Select(set => new MediumModel(layers, point, SingleFibreModel.Of(set))).ToArray();
         var central = media.Single(m => m.Model.Set == settings.Correlations);
-        var curve = particles.Select(p => Point(p, central, media)).ToImmutableArray();
-        var velocity = point.FaceVelocity.MetersPerSecond;
-        var pascals = central.PressureDropPascals(velocity);
-        var mostPenetrating = MostPenetrating.Size(central.Attenuation);
-        var attenuation = central.Attenuation(mostPenetrating ?? curve.MaxBy(c => c.Penetration)!.Particle.Meters);
+        var worst = media.Select(m => Worst.Of(m, particles)).ToArray();
+        var own = worst[Array.IndexOf(media, central)];
+        var monteCarlo = settings.Draws > 0 && MonteCarlo.HasInputs(layers, point)
+            ? new MonteCarlo(layers, point, settings, [.. particles.Select(p => p.Meters)])
+            : null;
+        var uncertainty = monteCarlo?.Run(own.Metres ?? own.WhereMetres);
         return new MediaForecast
         {
             Correlations = settings.Correlations,
             OperatingPoint = point,
-            PressureDrop = Pressure.FromPascals(pascals),
-            PressureDropModelBandPascals = Spread(media.Select(m => m.PressureDropPascals(velocity))),
-            Curve = curve,
-            MostPenetratingSize = mostPenetrating is { } metres ? Length.FromMeters(metres) : null,
-            PenetrationAtMostPenetratingSize = Math.Exp(-attenuation),
-            QualityFactorPerPascal = attenuation / pascals,
-            Caveats = [.. Caveats(layers, point, particles, central, media), .. RangeCaveats.ForDepth(attenuation)],
+            PressureDrop = Pressure.FromPascals(central.Pascals),
+            PressureDropModelBandPascals = Spread(media.Select(m => m.Pascals)),
+            Curve = [.. particles.Select((p, i) => Point(p, central, media, monteCarlo?.Curve[i]))],
+            MostPenetratingSize = own.Metres is { } metres ? Length.FromMeters(metres) : null,
+            PenetrationAtMostPenetratingSize = Math.Exp(-own.Attenuation),
+            QualityFactorPerPascal = own.Attenuation / central.Pascals,
+            MostPenetratingSizeModelBand = SpreadOfSizes(worst),
+            PenetrationAtMostPenetratingSizeModelBand = Spread(worst.Select(w => Math.Exp(-w.Attenuation))),
+            Uncertainty = uncertainty,
+            EdgeLeakShare = central.EdgeLeakShare,
+            HoleShares = [.. central.HoleShares],
+            Caveats = [.. ForecastCaveats.For(layers, point, particles, central, media), .. RangeCaveats.ForDepth(own.Attenuation)],
         };
     }
 
@@ -58,31 +66,40 @@ public static class MediaModel
     {
         Check(layers, point);
         Require.Positive(faceVelocity.MetersPerSecond, nameof(faceVelocity));
-        return Pressure.FromPascals(Medium(layers, point, settings).PressureDropPascals(faceVelocity.MetersPerSecond));
+        return Pressure.FromPascals(Medium(layers, point, settings).FlowAt(faceVelocity.MetersPerSecond).Pascals);
     }
 
     /// <summary>The face velocity that a pressure drop drives through a medium: its air permeability at that pressure.</summary>
     /// <remarks>
-    /// 1 mm/s is 1 L m⁻² s⁻¹. Usual pressures: 100 and 200 Pa (ISO 9237), 125 Pa (ASTM D737) (from memory). Creeping flow: no inertial
-    /// pressure drop, so open cloth reads too high.
+    /// 1 mm/s is 1 L m⁻² s⁻¹. Usual pressures: 100 and 200 Pa (ISO 9237), 125 Pa (ASTM D737) (from memory). Holes and gaps are
+    /// counted with their inertial loss, the fibres with creeping flow.
     /// </remarks>
     public static Speed AirPermeability(IReadOnlyList<MediaLayer> layers, OperatingPoint point, Pressure pressure, ForecastSettings? settings = null)
     {
         Check(layers, point);
         Require.Positive(pressure.Pascals, nameof(pressure));
-        return Speed.FromMetersPerSecond(pressure.Pascals / Medium(layers, point, settings).PascalsPerMetrePerSecond);
+        var medium = Medium(layers, point, settings);
+        var wanted = pressure.Pascals;
+        var upper = point.FaceVelocity.MetersPerSecond;
+        while (medium.FlowAt(upper).Pascals < wanted)
+        {
+            upper *= 2;
+        }
+
+        return Speed.FromMetersPerSecond(RisingRoot.Solve(u => medium.FlowAt(u).Pascals, wanted, upper));
     }
 
     private static MediumModel Medium(IReadOnlyList<MediaLayer> layers, OperatingPoint point, ForecastSettings? settings) =>
         new(layers, point, SingleFibreModel.Of((settings ?? new ForecastSettings()).Correlations));
 
-    private static CurvePoint Point(Length particle, MediumModel central, MediumModel[] media)
+    private static CurvePoint Point(Length particle, MediumModel central, MediumModel[] media, Interval? measured)
     {
         var mechanisms = central.Mechanisms(particle.Meters);
         return new CurvePoint
         {
             Particle = particle,
-            Penetration = Math.Exp(-mechanisms.Total),
+            Penetration = Math.Exp(-central.Attenuation(particle.Meters)),
+            MeasurementBand = measured,
             ModelBand = Spread(media.Select(m => Math.Exp(-m.Attenuation(particle.Meters)))),
             ByMechanism = Shares(mechanisms),
         };
@@ -98,31 +115,27 @@ public static class MediaModel
             ("impaction", brought.Impaction),
             ("gravity", Math.Max(0, brought.Gravity)),
             ("electrostatic", brought.Electrostatic),
+            ("straining", brought.Straining),
         ];
         var total = all.Sum(m => m.Value);
         return all.ToImmutableSortedDictionary(m => m.Name, m => total > 0 ? m.Value / total : 0, StringComparer.Ordinal);
-    }
-
-    private static IEnumerable<Caveat> Caveats(IReadOnlyList<MediaLayer> layers, OperatingPoint point, ImmutableArray<Length> particles, MediumModel central, MediumModel[] media)
-    {
-        var metres = particles.Select(p => p.Meters).ToArray();
-        foreach (var caveat in RangeCaveats.For(layers, point, metres, central.Model.Range))
-        {
-            yield return caveat;
-        }
-
-        var others = media.Where(m => m != central && RangeCaveats.For(layers, point, metres, m.Model.Range).Any(c => c.Code == "outside-fitted-range"))
-            .Select(m => m.Model.Range.Name).ToArray();
-        if (others.Length > 0)
-        {
-            yield return new Caveat("band-outside-fitted-range", $"The model band also holds {string.Join(" and ", others)}, outside the range of the fit for part of this curve.");
-        }
     }
 
     private static Interval Spread(IEnumerable<double> values)
     {
         var all = values.ToArray();
         return new Interval(all.Min(), all.Max());
+    }
+
+    private static LengthInterval? SpreadOfSizes(Worst[] worst)
+    {
+        if (worst.Any(w => w.Metres is null))
+        {
+            return null;
+        }
+
+        var band = Spread(worst.Select(w => w.Metres!.Value));
+        return new LengthInterval(Length.FromMeters(band.Low), Length.FromMeters(band.High));
     }
 
     private static void Check(IReadOnlyList<MediaLayer> layers, OperatingPoint point)

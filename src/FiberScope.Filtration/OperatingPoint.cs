@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Statistics;
 using UnitsNet;
 
 namespace FiberScope.Filtration;
@@ -20,4 +21,16 @@ public sealed record OperatingPoint
 
     /// <summary>Which way the air flows; across unless told otherwise.</summary>
     public FlowDirection Direction { get; init; } = FlowDirection.Horizontal;
+
+    /// <summary>How the particles are charged; matters to electret layers only.</summary>
+    public ParticleCharging Charging { get; init; } = ParticleCharging.Equilibrium;
+
+    /// <summary>Relative permittivity of the particles, above 1; 6.1 (rock salt, from memory) unless told otherwise. Oils: about 2.3.</summary>
+    public double ParticlePermittivity { get; init => field = Require.Within(value, 1, 1e6, nameof(ParticlePermittivity)); } = 6.1;
+
+    /// <summary>A gap past the whole medium; null for none.</summary>
+    public EdgeLeak? Leak { get; init; }
+
+    /// <summary>How well the conditions are known; null when nothing is said.</summary>
+    public OperatingUncertainty? Uncertainty { get; init; }
 }

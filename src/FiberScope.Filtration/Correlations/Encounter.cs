@@ -4,5 +4,4 @@ namespace FiberScope.Filtration.Correlations;
 /// <param name="Peclet">Pe = U df / D.</param>
 /// <param name="Ratio">R = dp / df.</param>
 /// <param name="Stokes">Stk = ρ dp² Cc U / (18 μ df).</param>
-/// <param name="SettlingRatio">G = settling velocity / face velocity.</param>
-internal readonly record struct Encounter(double Peclet, double Ratio, double Stokes, double SettlingRatio);
+internal readonly record struct Encounter(double Peclet, double Ratio, double Stokes);

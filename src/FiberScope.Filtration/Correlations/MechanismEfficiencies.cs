@@ -15,8 +15,10 @@ internal readonly record struct MechanismEfficiencies
 
     public double Electrostatic { get; init; }
 
+    public double Straining { get; init; }
+
     /// <summary>All of them together; never negative, though gravity may work against the rest.</summary>
-    public double Total => Math.Max(0, Diffusion + Interception + DiffusionInterception + Impaction + Gravity + Electrostatic);
+    public double Total => Math.Max(0, Diffusion + Interception + DiffusionInterception + Impaction + Gravity + Electrostatic + Straining);
 
     public MechanismEfficiencies Scale(double factor) => new()
     {
@@ -26,6 +28,7 @@ internal readonly record struct MechanismEfficiencies
         Impaction = Impaction * factor,
         Gravity = Gravity * factor,
         Electrostatic = Electrostatic * factor,
+        Straining = Straining * factor,
     };
 
     public MechanismEfficiencies Add(in MechanismEfficiencies other) => new()
@@ -36,5 +39,6 @@ internal readonly record struct MechanismEfficiencies
         Impaction = Impaction + other.Impaction,
         Gravity = Gravity + other.Gravity,
         Electrostatic = Electrostatic + other.Electrostatic,
+        Straining = Straining + other.Straining,
     };
 }

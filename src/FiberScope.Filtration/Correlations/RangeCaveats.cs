@@ -5,7 +5,7 @@ namespace FiberScope.Filtration.Correlations;
 /// <summary>Says where a forecast leaves the ranges that its formulas were fitted or tested on.</summary>
 internal static class RangeCaveats
 {
-    private const string Outside = "outside-fitted-range";
+    internal const string Outside = "outside-fitted-range";
 
     /// <summary>−ln P beyond which leaks, not the mat, decide.</summary>
     private const double LeaksDecide = 20;
@@ -79,7 +79,7 @@ internal static class RangeCaveats
         }
     }
 
-    private static string Name(MediaLayer layer, int index) => layer.Name.Length > 0 ? $"Layer '{layer.Name}'" : Text($"Layer {index + 1}");
+    internal static string Name(MediaLayer layer, int index) => layer.Name.Length > 0 ? $"Layer '{layer.Name}'" : Text($"Layer {index + 1}");
 
     private static string Span(double[] values, double scale) =>
         values.Length == 1 ? Text($"{values[0] * scale:G3}") : Text($"{values.Min() * scale:G3} to {values.Max() * scale:G3}");

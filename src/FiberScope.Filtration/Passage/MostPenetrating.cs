@@ -1,4 +1,4 @@
-namespace FiberScope.Filtration.Correlations;
+namespace FiberScope.Filtration.Passage;
 
 /// <summary>Finds the size that penetrates most.</summary>
 internal static class MostPenetrating
