@@ -97,7 +97,8 @@ public sealed class UncertaintyTests
             var draw = source.Next();
             var pascals = response.Evaluate(draw, null, found);
             var full = new MediumModel([.. layers.Select((l, k) => Drawn(l, draw.Layers[k]))], Drawn(draw), model);
-            Assert.Equal(full.Pascals, pascals, 1e-6 * full.Pascals);
+            // Holes keep the length of the nominal thickness, a few millionths of the pressure drop here.
+            Assert.Equal(full.Pascals, pascals, 2e-5 * full.Pascals);
             Assert.All(sizes.Zip(found), pair => Assert.Equal(full.Attenuation(pair.First), pair.Second, 0.015 * pair.Second));
         }
     }

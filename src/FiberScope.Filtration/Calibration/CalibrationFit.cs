@@ -144,14 +144,17 @@ internal sealed class CalibrationFit
     private MediumModel Medium(CalibrationRoll roll, double factor, double variation, double charge) =>
         new([.. roll.Layers.Select(l => With(l, factor, variation, charge))], roll.Point, _model);
 
-    /// <summary>A scan, so that a second minimum does not catch the search, then Brent's search about the best.</summary>
+    /// <summary>A scan, so that a second minimum does not catch the search, then golden sections about the best.</summary>
     private static double Minimum(Func<double, double> value, double low, double high)
     {
         const int Steps = 16;
         var best = Enumerable.Range(0, Steps + 1).Select(i => low + ((high - low) * i / Steps)).MinBy(value);
         var step = (high - low) / Steps;
         var (from, to) = (Math.Max(low, best - step), Math.Min(high, best + step));
-        return FindMinimum.OfScalarFunctionConstrained(value, from, to, 1e-4 * (high - low), 200);
+
+        // The search may step outside its bounds; the function may not.
+        double Inside(double x) => value(Math.Clamp(x, low, high));
+        return Math.Clamp(FindMinimum.OfScalarFunctionConstrained(Inside, from, to, 1e-4 * (high - low), 200), low, high);
     }
 
     private IEnumerable<Caveat> Caveats(Fitted fit)
