@@ -1,1 +1,4 @@
+using BenchmarkDotNet.Running;
+
+BenchmarkSwitcher.FromAssembly(typeof(FiberScope.Benchmarks.ForecastBenchmark).Assembly).Run(args);
 return 0;

@@ -49,10 +49,10 @@ public sealed class UncertaintyTests
     public void An_uncertain_velocity_gives_the_pressure_drop_its_own_log_normal_band()
     {
         var point = At(0.053) with { Uncertainty = new OperatingUncertainty { FaceVelocity = 0.1 } };
-        var forecast = MediaModel.Forecast([Known with { Uncertainty = null }], point, new ForecastSettings { Draws = 20_000 });
+        var forecast = MediaModel.Forecast([Known with { Uncertainty = null }], point, new ForecastSettings { Draws = 5000 });
         var band = forecast.Uncertainty!.PressureDropPascals;
-        Assert.Equal(0.196, Math.Log(band.High / forecast.PressureDrop.Pascals), 0.01);
-        Assert.Equal(-0.196, Math.Log(band.Low / forecast.PressureDrop.Pascals), 0.01);
+        Assert.Equal(0.196, Math.Log(band.High / forecast.PressureDrop.Pascals), 0.02);
+        Assert.Equal(-0.196, Math.Log(band.Low / forecast.PressureDrop.Pascals), 0.02);
     }
 
     [Fact]
@@ -97,8 +97,7 @@ public sealed class UncertaintyTests
             var draw = source.Next();
             var pascals = response.Evaluate(draw, null, found);
             var full = new MediumModel([.. layers.Select((l, k) => Drawn(l, draw.Layers[k]))], Drawn(draw), model);
-            // Holes keep the length of the nominal thickness, a few millionths of the pressure drop here.
-            Assert.Equal(full.Pascals, pascals, 2e-5 * full.Pascals);
+            Assert.Equal(full.Pascals, pascals, 1e-6 * full.Pascals);
             Assert.All(sizes.Zip(found), pair => Assert.Equal(full.Attenuation(pair.First), pair.Second, 0.015 * pair.Second));
         }
     }

@@ -25,11 +25,11 @@ internal sealed class LayerModel
         _weights = Weights(layer, model);
         _fibres = Array.ConvertAll(knudsen, kn => model.Fibre(solidity, kn, unevenness));
         _wallFactor = KuwabaraCell.WallFactor(solidity);
-        PascalsPerMetrePerSecond = Resistance(layer, air, model);
+        Even = new EvenLayer(Resistance(layer, air, model), layer.ThicknessMetres);
     }
 
-    /// <summary>Pressure drop per face velocity of the even layer, Pa s/m.</summary>
-    public double PascalsPerMetrePerSecond { get; }
+    /// <summary>What the flow through the layer rests on.</summary>
+    public EvenLayer Even { get; }
 
     public bool IsCharged => _layer.CoulombsPerSquareMetre > 0;
 

@@ -19,18 +19,18 @@ internal sealed class LayerPassage
     public VelocityNodes Velocities { get; }
 
     /// <summary>Pressure drop and the holes' share of the air at one mean velocity.</summary>
-    /// <param name="evenResistance">Resistance of the even layer, Pa s/m.</param>
+    /// <param name="even">The even layer.</param>
     /// <param name="metresPerSecond">Velocity over the whole layer.</param>
     /// <param name="air">The air.</param>
-    public LayerFlow Flow(double evenResistance, double metresPerSecond, AirProperties air)
+    public LayerFlow Flow(EvenLayer even, double metresPerSecond, AirProperties air)
     {
-        var resistance = evenResistance * Places.ResistanceFactor;
+        var resistance = even.PascalsPerMetrePerSecond * Places.ResistanceFactor;
         if (_layer.Holes.IsDefaultOrEmpty)
         {
             return new LayerFlow(resistance * metresPerSecond, 0);
         }
 
-        var pascals = RisingRoot.Solve(p => (p / resistance) + Holes(p, air), metresPerSecond, resistance * metresPerSecond);
+        var pascals = RisingRoot.Solve(p => (p / resistance) + Holes(p, even.ThicknessMetres, air), metresPerSecond, resistance * metresPerSecond);
         return new LayerFlow(pascals, Math.Clamp(1 - (pascals / resistance / metresPerSecond), 0, 1));
     }
 
@@ -64,12 +64,12 @@ internal sealed class LayerPassage
         return Mixing.Attenuation(Places.FlowShares, values);
     }
 
-    private double Holes(double pascals, AirProperties air)
+    private double Holes(double pascals, double thicknessMetres, AirProperties air)
     {
         var sum = 0.0;
         foreach (var holes in _layer.Holes)
         {
-            sum += holes.MetresPerSecond(_layer.Thickness.Meters, pascals, air);
+            sum += holes.MetresPerSecond(thicknessMetres, pascals, air);
         }
 
         return sum;

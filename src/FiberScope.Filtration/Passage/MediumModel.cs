@@ -36,7 +36,7 @@ internal sealed class MediumModel
 
     /// <summary>Flow through all layers, and past them, at a face velocity.</summary>
     public MediumFlow FlowAt(double metresPerSecond) =>
-        MediumFlow.At(metresPerSecond, Array.ConvertAll(_layers, l => l.PascalsPerMetrePerSecond), _passages, _point.Leak, _air);
+        MediumFlow.At(metresPerSecond, Array.ConvertAll(_layers, l => l.Even), _passages, _point.Leak, _air);
 
     /// <summary>What each mechanism brings to −ln P at one size: of even layers, at the mean velocity, over the charges' mean.</summary>
     public MechanismEfficiencies Mechanisms(double particleMetres)

@@ -27,7 +27,7 @@ internal sealed class MediumResponse
         });
         _passages = [.. layers.Select(l => new LayerPassage(l))];
         var nominal = MediumFlow.At(
-            point.FaceVelocity.MetersPerSecond, [.. layers.Select(l => LayerModel.Resistance(LayerFigures.Of(l), _air, model))], _passages, point.Leak, _air);
+            point.FaceVelocity.MetersPerSecond, [.. layers.Select(l => new EvenLayer(LayerModel.Resistance(LayerFigures.Of(l), _air, model), l.Thickness.Meters))], _passages, point.Leak, _air);
         _nominalVelocities = [.. nominal.Layers.Select(l => nominal.MetresPerSecond * (1 - l.LeakShare))];
         _layers = [.. layers.Select((l, i) => new LayerResponse(l, point, model, _passages[i].Velocities, _nominalVelocities[i], _sizes))];
     }
@@ -42,15 +42,16 @@ internal sealed class MediumResponse
     public double Evaluate(InputDraw draw, int? only, double[] attenuations)
     {
         var air = DrawnAir.Of(_point.Air, draw.KelvinsAbove, draw.LogPressure);
-        var resistances = new double[_layers.Length];
+        var even = new EvenLayer[_layers.Length];
         var weights = new double[_layers.Length][];
         for (var i = 0; i < _layers.Length; i++)
         {
-            resistances[i] = LayerModel.Resistance(_layers[i].Drawn(draw.Layers[i]), air, _model);
+            var drawn = _layers[i].Drawn(draw.Layers[i]);
+            even[i] = new EvenLayer(LayerModel.Resistance(drawn, air, _model), drawn.ThicknessMetres);
             weights[i] = _layers[i].NodeWeights(draw.Layers[i]);
         }
 
-        var flow = MediumFlow.At(_point.FaceVelocity.MetersPerSecond * Math.Exp(draw.LogVelocity), resistances, _passages, _point.Leak, air);
+        var flow = MediumFlow.At(_point.FaceVelocity.MetersPerSecond * Math.Exp(draw.LogVelocity), even, _passages, _point.Leak, air);
         var (first, end) = only is { } one ? (one, one + 1) : (0, _sizes.Length);
         for (var size = first; size < end; size++)
         {
