@@ -37,7 +37,7 @@ internal static class SetSection
     {
         var model = SingleFibreModel.Of(set);
         var fibre = model.Fibre(c.Solidity, c.Knudsen, 1);
-        var encounter = new Encounter(Math.Min(c.Peclet, NoDiffusion), c.Ratio, c.Stokes, 0);
+        var encounter = new Encounter(Math.Min(c.Peclet, NoDiffusion), c.Ratio, c.Stokes);
         var efficiency = fibre.Limit(fibre.Collect(encounter).Total) / (model.CountsOpenVolumeOnly ? 1 - c.Solidity : 1);
         return (efficiency / c.Efficiency) - 1;
     }
