@@ -47,15 +47,15 @@ public static class FieldMeter
 
     private static FieldMeasurement Result(
         Micrograph micrograph, MeasurementSettings settings, ImmutableArray<Trace> traces, ImmutableArray<PixelReading> readings, ImmutableSortedDictionary<string, int> rejected, double blur) => new()
-    {
-        Micrograph = micrograph,
-        Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = readings }, settings.Fitness),
-        Traces = traces,
-        Readings = readings,
-        Rejected = rejected,
-        Defects = [],
-        DetectionLimitPixels = Math.Max(2.5, 2 * blur),
-        BlurPixels = blur,
-        Algorithm = Algorithm,
-    };
+        {
+            Micrograph = micrograph,
+            Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = readings }, settings.Fitness),
+            Traces = traces,
+            Readings = readings,
+            Rejected = rejected,
+            Defects = [],
+            DetectionLimitPixels = Math.Max(2.5, 2 * blur),
+            BlurPixels = blur,
+            Algorithm = Algorithm,
+        };
 }

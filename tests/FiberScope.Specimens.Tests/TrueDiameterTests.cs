@@ -58,8 +58,18 @@ public sealed class TrueDiameterTests
         },
         Electrons = new ElectronLook
         {
-            RimHeight = 0, Dome = 0, Asymmetry = 0, BrightnessSpread = 0, ShadingDepth = 100, DeepBrightness = 1, CreviceShadow = 0,
-            Translucency = 0, Ground = 0, Mottle = 0, Glow = 0, ChargedShare = 0,
+            RimHeight = 0,
+            Dome = 0,
+            Asymmetry = 0,
+            BrightnessSpread = 0,
+            ShadingDepth = 100,
+            DeepBrightness = 1,
+            CreviceShadow = 0,
+            Translucency = 0,
+            Ground = 0,
+            Mottle = 0,
+            Glow = 0,
+            ChargedShare = 0,
         },
         Camera = new CameraRecipe { BlurPixels = 0, DefocusPixels = 0, BlackLevel = 0, ClippedShare = 0, ElectronsPerPixel = 0, ReadNoise = 0, JitterPixels = 0 },
     };

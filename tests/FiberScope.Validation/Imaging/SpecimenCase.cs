@@ -89,8 +89,20 @@ internal sealed class SpecimenCase
         var turned = TrueOrientation.Of(stations.Select(s => ((double)s.Direction, (double)s.Length)));
         var truth = new SpecimenTruth
         {
-            Recipe = recipe, Seed = seed, FibreDiameters = [], Stations = [.. stations], Sections = [.. sections], Visible = none, BothEdges = none, Mat = none,
-            Orientation = turned, MatOrientation = turned, Solidity = solidity, Cover = cover, Defects = [.. defects], VisibleDepth = UnitsNet.Length.Zero,
+            Recipe = recipe,
+            Seed = seed,
+            FibreDiameters = [],
+            Stations = [.. stations],
+            Sections = [.. sections],
+            Visible = none,
+            BothEdges = none,
+            Mat = none,
+            Orientation = turned,
+            MatOrientation = turned,
+            Solidity = solidity,
+            Cover = cover,
+            Defects = [.. defects],
+            VisibleDepth = UnitsNet.Length.Zero,
         };
         return new SpecimenCase(truth, pixels, mask);
     }
