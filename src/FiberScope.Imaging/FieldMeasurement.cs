@@ -29,6 +29,12 @@ public sealed record FieldMeasurement
     /// <summary>The estimated blur of the picture as the sigma of a Gaussian; pixels.</summary>
     public required double BlurPixels { get; init; }
 
+    /// <summary>
+    /// The share of the field that fibre takes: the area of cut fibre in a section, the coverage of a layer in transmitted light; null
+    /// where it says nothing about solidity. Dimensionless, 0 to 1.
+    /// </summary>
+    public double? FibreShare { get; init; }
+
     /// <summary>Name and version of the algorithms, kept with every result.</summary>
     public required string Algorithm { get; init; }
 }

@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using FiberScope.Imaging.Edges;
 using FiberScope.Imaging.Fitness;
+using FiberScope.Imaging.Sections;
 using FiberScope.Imaging.Selection;
 using FiberScope.Imaging.Tracing;
 
@@ -19,6 +20,11 @@ public static class FieldMeter
     /// <exception cref="OperationCanceledException">The work was stopped.</exception>
     public static FieldMeasurement Measure(Micrograph micrograph, MeasurementSettings settings, CancellationToken cancellation = default)
     {
+        if (micrograph.Mode == ImagingMode.CrossSection)
+        {
+            return SectionMeter.Measure(micrograph, settings, cancellation);
+        }
+
         var tracing = settings.Tracing;
         var widest = tracing.WidestShare * Math.Min(micrograph.Width, micrograph.UsableHeight);
         if (StabilisedPicture.From(micrograph, widest) is not { } picture)

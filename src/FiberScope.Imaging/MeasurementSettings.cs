@@ -1,4 +1,5 @@
 using FiberScope.Imaging.Fitness;
+using FiberScope.Imaging.Sections;
 using FiberScope.Imaging.Tracing;
 
 namespace FiberScope.Imaging;
@@ -11,4 +12,7 @@ public sealed record MeasurementSettings
 
     /// <summary>When a field is unfit for measuring.</summary>
     public FitnessSettings Fitness { get; init; } = new();
+
+    /// <summary>How cut fibres are read in a section.</summary>
+    public SectionSettings Sections { get; init; } = new();
 }
