@@ -1,51 +1,64 @@
 namespace FiberScope.Imaging.Edges;
 
-/// <summary>Small symmetric systems of equations, solved in place without allocation of a matrix type.</summary>
+/// <summary>Small symmetric positive systems of equations, solved in place in the caller's memory.</summary>
 internal static class SmallSystem
 {
-    /// <summary>Solves by Cholesky; only the lower triangle is read. Rows without content give zero.</summary>
-    public static double[] Solve(double[,] matrix, double[] right, int size)
+    /// <summary>Replaces the lower triangle of a matrix (row by row, size × size) by its Cholesky factor.</summary>
+    public static void Factorise(Span<double> matrix, int size)
     {
         for (var j = 0; j < size; j++)
         {
-            for (var k = 0; k < j; k++)
+            for (var i = j; i < size; i++)
             {
-                matrix[j, j] -= matrix[j, k] * matrix[j, k];
-            }
-
-            matrix[j, j] = Math.Sqrt(Math.Max(matrix[j, j], 1e-12));
-            for (var i = j + 1; i < size; i++)
-            {
+                var sum = matrix[(i * size) + j];
                 for (var k = 0; k < j; k++)
                 {
-                    matrix[i, j] -= matrix[i, k] * matrix[j, k];
+                    sum -= matrix[(i * size) + k] * matrix[(j * size) + k];
                 }
 
-                matrix[i, j] /= matrix[j, j];
+                matrix[(i * size) + j] = i == j ? Math.Sqrt(Math.Max(sum, 1e-12)) : sum / matrix[(j * size) + j];
             }
         }
+    }
 
-        var x = (double[])right.Clone();
-        for (var i = 0; i < size; i++)
-        {
-            for (var k = 0; k < i; k++)
-            {
-                x[i] -= matrix[i, k] * x[k];
-            }
-
-            x[i] /= matrix[i, i];
-        }
-
+    /// <summary>Replaces the right side by the solution; <paramref name="factor"/> comes from <see cref="Factorise"/>.</summary>
+    public static void Solve(ReadOnlySpan<double> factor, Span<double> right, int size)
+    {
+        HalfSolve(factor, right, size);
         for (var i = size - 1; i >= 0; i--)
         {
             for (var k = i + 1; k < size; k++)
             {
-                x[i] -= matrix[k, i] * x[k];
+                right[i] -= factor[(k * size) + i] * right[k];
             }
 
-            x[i] /= matrix[i, i];
+            right[i] /= factor[(i * size) + i];
+        }
+    }
+
+    /// <summary>cᵀ A⁻¹ c, the variance of a sum of parameters with the coefficients c; c is overwritten.</summary>
+    public static double Variance(ReadOnlySpan<double> factor, Span<double> coefficients, int size)
+    {
+        HalfSolve(factor, coefficients, size);
+        var sum = 0.0;
+        for (var i = 0; i < size; i++)
+        {
+            sum += coefficients[i] * coefficients[i];
         }
 
-        return x;
+        return sum;
+    }
+
+    private static void HalfSolve(ReadOnlySpan<double> factor, Span<double> right, int size)
+    {
+        for (var i = 0; i < size; i++)
+        {
+            for (var k = 0; k < i; k++)
+            {
+                right[i] -= factor[(i * size) + k] * right[k];
+            }
+
+            right[i] /= factor[(i * size) + i];
+        }
     }
 }

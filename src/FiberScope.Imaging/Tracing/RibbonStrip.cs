@@ -83,6 +83,9 @@ internal sealed class RibbonStrip
         return strip;
     }
 
+    /// <summary>The grey of the picture beside a row's centre, neither smoothed nor resampled; pixels.</summary>
+    public float Grey(int row, double offset) => _picture.Sample((float)(X[row] + (offset * Nx[row])), (float)(Y[row] + (offset * Ny[row])));
+
     /// <summary>The smoothed value at an offset from the centre line; pixels.</summary>
     public float At(int row, double offset) => Smooth[(row * Columns) + Column(offset)];
 
