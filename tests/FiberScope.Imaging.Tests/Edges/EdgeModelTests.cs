@@ -69,7 +69,7 @@ public sealed class EdgeModelTests
     [Fact]
     public void A_fibre_out_of_focus_is_told_by_its_blur()
     {
-        var looks = Looks(CylinderLook.Secant, 1, 0.4, 25, 5).Append(Look(20, 3, CylinderLook.Secant, 0.4, 25));
+        var looks = Looks(CylinderLook.Secant, 1, 0.4, 25, 5).Append(Look(40, 3, CylinderLook.Secant, 0.4, 60));
         var group = FibreGroup.Of(looks, 13);
         Assert.InRange(group.Fibres[^1].Fit.Blur, 2.4, 3.6);
     }
