@@ -39,6 +39,6 @@ public static partial class NativeImaging
     }
 
     // The library's own name stands first in the loader's message; what it needs is what "cannot open shared object" names.
-    [GeneratedRegex(@"(?<file>lib(?!OpenCvSharpExtern)[\w.+-]+\.so[.\d]*): cannot open", RegexOptions.CultureInvariant, 1000)]
+    [GeneratedRegex(@"(?<file>lib(?!OpenCvSharpExtern)[\w.+-]+\.so[.\d]*): cannot open", RegexOptions.CultureInvariant, 60_000)]
     private static partial Regex MissingFile();
 }

@@ -112,12 +112,12 @@ internal static partial class QuantityText
         ? $"'{text.Trim()}' has a decimal comma; use a decimal point, such as {example}"
         : $"'{text.Trim()}' is not a number with a unit; write such as {example}";
 
-    [GeneratedRegex(@"±|\+/-|\+-", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]
+    [GeneratedRegex(@"±|\+/-|\+-", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex PlusMinus();
 
-    [GeneratedRegex(@"^(?<number>[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(?<unit>(?:[^\d\s,.+-]|1/).*)?$", RegexOptions.CultureInvariant | RegexOptions.ExplicitCapture, matchTimeoutMilliseconds: 1000)]
+    [GeneratedRegex(@"^(?<number>[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(?<unit>(?:[^\d\s,.+-]|1/).*)?$", RegexOptions.CultureInvariant | RegexOptions.ExplicitCapture, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex NumberAndUnit();
 
-    [GeneratedRegex(@"\d,\d", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]
+    [GeneratedRegex(@"\d,\d", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex DecimalComma();
 }

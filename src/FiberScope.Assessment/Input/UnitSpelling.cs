@@ -13,9 +13,9 @@ internal static partial class UnitSpelling
         return MicroByLetter().Replace(text, "µ${base}");
     }
 
-    [GeneratedRegex(@"(?<=^|[/ ])(?<length>[kcmdnuµ]?m|in|ft)\^?(?<power>[23])(?![\w])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]
+    [GeneratedRegex(@"(?<=^|[/ ])(?<length>[kcmdnuµ]?m|in|ft)\^?(?<power>[23])(?![\w])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex SquareOrCube();
 
-    [GeneratedRegex(@"(?<![\p{L}])u(?<base>m|g|l|s)(?![\p{L}])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 1000)]
+    [GeneratedRegex(@"(?<![\p{L}])u(?<base>m|g|l|s)(?![\p{L}])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex MicroByLetter();
 }

@@ -94,15 +94,15 @@ internal static partial class TextScale
         return metres is >= 1e-12 and <= PrintingResolution.LargestPixelMetres ? metres : null;
     }
 
-    [GeneratedRegex(@"(?<![A-Za-z])(?<key>[A-Za-z][A-Za-z _\-.]{3,40}?)[ \t]*(?:[\[(][ \t]*(?<bracket>" + LengthUnits.Pattern + @")(?:/p(?:i)?x(?:el)?)?[ \t]*[\])])?[ \t""]*[:=][ \t""]*" + Number + @"(?:[ \t]*(?<unit>" + LengthUnits.Pattern + @")(?![A-Za-z0-9²^]))?", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, 1000)]
+    [GeneratedRegex(@"(?<![A-Za-z])(?<key>[A-Za-z][A-Za-z _\-.]{3,40}?)[ \t]*(?:[\[(][ \t]*(?<bracket>" + LengthUnits.Pattern + @")(?:/p(?:i)?x(?:el)?)?[ \t]*[\])])?[ \t""]*[:=][ \t""]*" + Number + @"(?:[ \t]*(?<unit>" + LengthUnits.Pattern + @")(?![A-Za-z0-9²^]))?", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, 60_000)]
     private static partial Regex Entry();
 
-    [GeneratedRegex(@"(?<![\w.,+-])" + Number + @"[ \t]*(?<unit>" + LengthUnits.Pattern + @")[ \t]*(?:/|per)[ \t]*(?:pixel|px)\b", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, 1000)]
+    [GeneratedRegex(@"(?<![\w.,+-])" + Number + @"[ \t]*(?<unit>" + LengthUnits.Pattern + @")[ \t]*(?:/|per)[ \t]*(?:pixel|px)\b", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, 60_000)]
     private static partial Regex PerPixel();
 
-    [GeneratedRegex(@"(?m)^[ \t]*unit[ \t]*=[ \t]*(?<unit>[^\r\n\0]{1,20}?)[ \t\0]*$", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, 1000)]
+    [GeneratedRegex(@"(?m)^[ \t]*unit[ \t]*=[ \t]*(?<unit>[^\r\n\0]{1,20}?)[ \t\0]*$", RegexOptions.IgnoreCase | RegexOptions.CultureInvariant, 60_000)]
     private static partial Regex Unit();
 
-    [GeneratedRegex(@"^[+-]?[1-9]\d{0,2},\d{3}$", RegexOptions.CultureInvariant, 1000)]
+    [GeneratedRegex(@"^[+-]?[1-9]\d{0,2},\d{3}$", RegexOptions.CultureInvariant, 60_000)]
     private static partial Regex Thousands();
 }

@@ -35,6 +35,6 @@ internal sealed partial record SvgFigure
         return new SvgFigure(open + System.Net.WebUtility.HtmlEncode(description) + "\">" + body);
     }
 
-    [GeneratedRegex(@">\s+<", RegexOptions.None, 2000)]
+    [GeneratedRegex(@">\s+<", RegexOptions.None, 60_000)]
     private static partial Regex BetweenTags();
 }
