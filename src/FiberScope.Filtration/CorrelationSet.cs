@@ -12,6 +12,9 @@ public enum CorrelationSet
     /// <summary>The textbook set of Hinds (1999), chapter 9; <c>hinds-1999</c>.</summary>
     Hinds1999,
 
-    /// <summary>The numerical solution of the Kuwabara cell with slip, tabulated; <c>cell</c>.</summary>
+    /// <summary>The numerical solution of the Kuwabara cell with slip, tabulated: an even array of fibres; <c>cell</c>.</summary>
     Cell,
+
+    /// <summary>The same, as uneven as Davies' law for real pads says mats are; <c>cell-mat</c>.</summary>
+    CellMat,
 }

@@ -21,6 +21,7 @@ public static class Words
         ["lee-liu-1982"] = CorrelationSet.LeeLiu1982,
         ["hinds-1999"] = CorrelationSet.Hinds1999,
         ["cell"] = CorrelationSet.Cell,
+        ["cell-mat"] = CorrelationSet.CellMat,
     };
 
     /// <summary>The word for a choice.</summary>

@@ -1,28 +1,35 @@
 using FiberScope.Filtration.Cell;
+using FiberScope.Filtration.Drag;
 using FiberScope.Statistics;
 
 namespace FiberScope.Filtration.Correlations;
 
-/// <summary>The numerical solution of the Kuwabara cell with slip, as it stands: its own drag, its own efficiency, nothing fitted to media.</summary>
+/// <summary>The numerical solution of the Kuwabara cell with slip, as it stands or as uneven as Davies' law says real mats are.</summary>
 /// <remarks>
-/// An even array of parallel fibres across the flow. Real mats are less even, so both drag and efficiency of a mat of known
-/// fibre diameters come out too high together; with a diameter taken from a measured pressure drop by the set's own drag the two
-/// errors cancel to a good part. No (1 − α) in −ln P: the cell's speed is the face velocity.
+/// As it stands it is an even array of parallel fibres across the flow: nothing is fitted to media, and drag and efficiency of
+/// a mat of known fibre diameters come out too high together. Divided, both alike, by the cell's drag over Davies' law it is
+/// tied to real pads, as the fan model is by its ε. No (1 − α) in −ln P: the cell's speed is the face velocity.
 /// </remarks>
-internal sealed class CellModel : SingleFibreModel
+/// <param name="realMat">Whether the cell's unevenness is that of real mats.</param>
+internal sealed class CellModel(bool realMat) : SingleFibreModel
 {
-    public override CorrelationSet Set => CorrelationSet.Cell;
+    public override CorrelationSet Set => realMat ? CorrelationSet.CellMat : CorrelationSet.Cell;
 
     public override ApplicableRange Range { get; } = new(
-        "the cell solution", new Interval(0.005, 0.3), new Interval(0.2e-6, 50e-6), new Interval(0.01e-6, 10e-6), new Interval(0.005, 5), 0.25);
+        realMat ? "the cell solution tied to Davies' law" : "the cell solution",
+        new Interval(0.005, 0.3), new Interval(0.2e-6, 50e-6), new Interval(0.01e-6, 10e-6), new Interval(0.005, 5), 0.25);
 
     public override bool CountsOpenVolumeOnly => false;
 
     public override double DragFactor(double solidity, double fibreKnudsen, double unevenness) =>
-        new KuwabaraFlow(solidity, fibreKnudsen).PressureDropFactor / unevenness;
+        new KuwabaraFlow(solidity, fibreKnudsen).PressureDropFactor / Unevenness(solidity, unevenness);
 
     public override SingleFibre Fibre(double solidity, double fibreKnudsen, double unevenness) =>
-        new CellFibre(new CellSolution(solidity, fibreKnudsen), unevenness);
+        new CellFibre(new CellSolution(solidity, fibreKnudsen), Unevenness(solidity, unevenness));
+
+    private double Unevenness(double solidity, double further) => realMat
+        ? further * new KuwabaraFlow(solidity, 0).PressureDropFactor / DragLaw.Davies(solidity)
+        : further;
 
     private sealed class CellFibre(CellSolution cell, double unevenness) : SingleFibre
     {

@@ -35,7 +35,8 @@ internal abstract class SingleFibreModel
         CorrelationSet.KirschStechkina1978 => new KirschStechkinaModel(),
         CorrelationSet.LeeLiu1982 => new LeeLiuModel(),
         CorrelationSet.Hinds1999 => new HindsModel(),
-        CorrelationSet.Cell => new CellModel(),
+        CorrelationSet.Cell => new CellModel(realMat: false),
+        CorrelationSet.CellMat => new CellModel(realMat: true),
         _ => throw new ArgumentOutOfRangeException(nameof(set), set, "There is no model for this set of correlations."),
     };
 }

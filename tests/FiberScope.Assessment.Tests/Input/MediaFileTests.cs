@@ -43,7 +43,7 @@ public sealed class MediaFileTests
     [InlineData("{median: 1.8 um, gsd: 1.6}", "{measurement: nowhere.json}", 3, "no such file")]
     [InlineData("face_velocity: 5.3 cm/s", "note: x", 1, "face_velocity is missing")]
     [InlineData("face_velocity: 5.3 cm/s", "face_velocity: 5.3 Pa", 13, "is a pressure; a velocity is wanted")]
-    [InlineData("correlations: hinds-1999", "correlations: best", 16, "not one of kirsch-stechkina-1978, lee-liu-1982, hinds-1999, cell")]
+    [InlineData("correlations: hinds-1999", "correlations: best", 16, "not one of kirsch-stechkina-1978, lee-liu-1982, hinds-1999, cell, cell-mat")]
     [InlineData("particles: [1 um, 0.3 um]", "particles: [0]", 15, "no unit")]
     public void A_mistake_is_told_with_its_line(string right, string wrong, int line, string told)
     {

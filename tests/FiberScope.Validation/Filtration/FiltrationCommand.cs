@@ -42,6 +42,9 @@ internal static class FiltrationCommand
     {
         var stacks = MeasuredStack.ReadAll();
         UnfittedSection.Write(text, stacks);
+        StackSection.Write(text, stacks);
+        ChargeSection.Write(text, stacks);
+        DefaultSection.Write(text);
     }
 
     private static void Report(TextWriter log)

@@ -9,7 +9,7 @@ internal static class UnfittedSection
     internal static readonly (CorrelationSet Set, string Word)[] Sets =
     [
         (CorrelationSet.KirschStechkina1978, "kirsch-stechkina-1978"), (CorrelationSet.LeeLiu1982, "lee-liu-1982"),
-        (CorrelationSet.Hinds1999, "hinds-1999"), (CorrelationSet.Cell, "cell"),
+        (CorrelationSet.Hinds1999, "hinds-1999"), (CorrelationSet.Cell, "cell"), (CorrelationSet.CellMat, "cell-mat"),
     ];
 
     private sealed record Forecast(MeasuredStack Stack, CorrelationSet Set, double Diameter, MediaForecast Result)
@@ -24,7 +24,8 @@ internal static class UnfittedSection
         var forecasts = Sets.SelectMany(set => discharged.Select(s => Make(s, set.Set))).ToList();
         text.Heading(3, "Measured media, nothing fitted but the effective diameter")
             .Paragraph($"Data: S. N. Rogak, T. A. Sipkens, M. Guan, H. Nikookar, D. Vargas Figueroa and J. Wang, \"Properties of materials considered for improvised masks\" (2020), arXiv:2008.06001, with the authors' data table (`Published/measured-media.csv`): salt particles, 4.9 cm/s. Fibre diameters were not reported: each set gets the one diameter at which its own drag law gives the measured pressure drop; solidity from weight, thickness and 905 kg/m³. Judged on the discharged media with a known thickness at 0.33–1.21 µm; wanted: median 0.05, nine in ten 0.12 (absolute).")
-            .Table(["set", "points", "median error", "nine in ten", "mean with sign", "wanted"], Sets.Select(set => Row(set.Word, [.. forecasts.Where(f => f.Set == set.Set)])));
+            .Table(["set", "points", "median error", "nine in ten", "mean with sign", "wanted"],
+                Sets.Select(set => Row($"`{set.Word}`", [.. forecasts.Where(f => f.Set == set.Set)])));
         Values(text, forecasts);
         foreach (var (stack, name) in Pictured(discharged))
         {
@@ -33,7 +34,7 @@ internal static class UnfittedSection
         }
     }
 
-    internal static ForecastSettings Settings(CorrelationSet set) => new() { Correlations = set };
+    internal static ForecastSettings Settings(CorrelationSet set) => new() { Correlations = set, Draws = 0 };
 
     private static Forecast Make(MeasuredStack stack, CorrelationSet set)
     {
@@ -45,18 +46,18 @@ internal static class UnfittedSection
     {
         var summary = ErrorSummary.Of(forecasts.SelectMany(f => f.Judged));
         var met = summary is { Median: <= 0.05, NinetyPercent: <= 0.12 };
-        return [$"`{word}`", MarkdownText.Number(summary.Count), MarkdownText.Number(summary.Median, "0.000"), MarkdownText.Number(summary.NinetyPercent, "0.000"), MarkdownText.Number(summary.Bias, "+0.000;-0.000"), met ? "met" : "missed"];
+        return [word, MarkdownText.Number(summary.Count), MarkdownText.Number(summary.Median, "0.000"), MarkdownText.Number(summary.NinetyPercent, "0.000"), MarkdownText.Number(summary.Bias, "+0.000;-0.000"), met ? "met" : "missed"];
     }
 
     private static void Values(MarkdownText text, List<Forecast> forecasts)
     {
         var sizes = new[] { 0, 3, 5, 6, 9, 12 };
         var stacks = forecasts.Select(f => f.Stack).Distinct().ToList();
-        text.Paragraph($"Penetration forecast with `kirsch-stechkina-1978` / `cell` and, after the colon, measured, by particle size; d: the effective diameters of the two sets:")
+        text.Paragraph($"Penetration forecast with `kirsch-stechkina-1978` / `cell-mat` and, after the colon, measured, by particle size; d: the effective diameters of the two sets:")
             .Table(["medium", "layers", "α", "d, µm", .. sizes.Select(i => MarkdownText.Number(stacks[0].Micrometres[i], "0.00") + " µm")], stacks.Select(s =>
             {
                 var fan = forecasts.Single(f => f.Stack == s && f.Set == CorrelationSet.KirschStechkina1978);
-                var cell = forecasts.Single(f => f.Stack == s && f.Set == CorrelationSet.Cell);
+                var cell = forecasts.Single(f => f.Stack == s && f.Set == CorrelationSet.CellMat);
                 string P(double value) => MarkdownText.Number(value, "0.00");
                 return (IReadOnlyList<string>)
                 [
@@ -78,13 +79,13 @@ internal static class UnfittedSection
         var x = stack.Micrometres.Select(Math.Log10).ToArray();
         var mine = forecasts.Where(f => f.Stack == stack).ToList();
         double[] Curve(CorrelationSet set) => [.. mine.Single(f => f.Set == set).Result.Curve.Select(c => c.Penetration)];
-        var published = mine.Where(f => f.Set != CorrelationSet.Cell).Select(f => f.Result.Curve.Select(c => c.Penetration).ToArray()).ToList();
+        var published = mine.Where(f => f.Set < CorrelationSet.Cell).Select(f => f.Result.Curve.Select(c => c.Penetration).ToArray()).ToList();
         var band = plot.Add.FillY(x, [.. x.Select((_, i) => published.Min(c => c[i]))], [.. x.Select((_, i) => published.Max(c => c[i]))]);
         band.FillStyle.Color = new ScottPlot.Color(190, 205, 225);
         band.LineStyle.Width = 0;
         band.LegendText = "published sets, each with its own diameter";
         Line(plot, x, Curve(CorrelationSet.KirschStechkina1978), "kirsch-stechkina-1978", new ScottPlot.Color(33, 85, 150));
-        Line(plot, x, Curve(CorrelationSet.Cell), "cell", new ScottPlot.Color(20, 120, 80));
+        Line(plot, x, Curve(CorrelationSet.CellMat), "cell-mat", new ScottPlot.Color(20, 120, 80));
         var measured = plot.Add.ScatterPoints(x, [.. stack.Penetration]);
         measured.Color = Colors.Black;
         measured.MarkerSize = 7;

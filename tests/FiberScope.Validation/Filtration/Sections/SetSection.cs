@@ -14,7 +14,7 @@ internal static class SetSection
     private static readonly (CorrelationSet Set, string Word)[] Sets =
     [
         (CorrelationSet.KirschStechkina1978, "kirsch-stechkina-1978"), (CorrelationSet.LeeLiu1982, "lee-liu-1982"),
-        (CorrelationSet.Hinds1999, "hinds-1999"), (CorrelationSet.Cell, "cell"),
+        (CorrelationSet.Hinds1999, "hinds-1999"), (CorrelationSet.Cell, "cell"), (CorrelationSet.CellMat, "cell-mat"),
     ];
 
     public static void Write(MarkdownText text, ReferenceGrid grid)
@@ -26,7 +26,7 @@ internal static class SetSection
         Table(text, "diffusion + interception, Kn 1, Pe 10–1e5", grid.Diffusion.Where(c => c is { Knudsen: 1, Peclet: >= 10 and <= 1e5, Ratio: <= 1 }));
         Table(text, "inertia + interception, Stk ≤ 0.1, no slip", grid.Inertia.Where(c => c is { Knudsen: 0, Stokes: <= 0.1, Ratio: <= 1 }));
         Table(text, "inertia + interception, Stk ≥ 0.3, no slip", grid.Inertia.Where(c => c is { Knudsen: 0, Stokes: >= 0.3, Ratio: <= 1 }));
-        foreach (var (set, word) in Sets.Where(s => s.Set != CorrelationSet.Cell))
+        foreach (var (set, word) in Sets.Where(s => s.Set < CorrelationSet.Cell))
         {
             Map(text, set, $"set-{word}-diffusion", $"{word}, α 0.1, no inertia: error, %", ReferenceGrid.Peclets, "Peclet number", (pe, r) => grid.Diffusion.FirstOrDefault(c => c.Solidity == MapSolidity && c.Knudsen == 0 && c.Peclet == pe && c.Ratio == r));
             Map(text, set, $"set-{word}-inertia", $"{word}, α 0.1, no diffusion: error, %", ReferenceGrid.Stokeses, "Stokes number", (stk, r) => grid.Inertia.FirstOrDefault(c => c.Solidity == MapSolidity && c.Knudsen == 0 && c.Stokes == stk && c.Ratio == r));
