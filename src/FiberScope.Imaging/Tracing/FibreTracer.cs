@@ -37,7 +37,7 @@ internal sealed class FibreTracer
 
     private List<Seed> Seeds(CancellationToken cancellation)
     {
-        const float Widest = 13, NarrowestHigher = 5.6f;
+        const float Widest = 13, NarrowestHigher = 3.4f;
         var seeds = new List<Seed>();
         for (var l = 0; l < _picture.Levels.Length; l++)
         {
@@ -68,53 +68,66 @@ internal sealed class FibreTracer
             tried.Take(point.X, point.Y, point.Normal, Math.Max(1, 0.2 * width), 2 * scale);
         }
 
-        if (track.Count * scale < Math.Max(6, width) || width > _widest)
+        if (Length(track) < Math.Max(6, width) || width > _widest)
         {
             return null;
         }
 
         var rival = Rival(track, seed.Level, width);
-        return rival < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width) is { } strip
+        return rival < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width, _picture.GreyNoise) is { } strip
             ? Judge.Judge(strip, rival, InsideTexture.Of(strip, _finest!))
             : null;
     }
 
-    /// <summary>The score of the best wider ribbon that shares one of the edges, over the track's own.</summary>
-    private double Rival(List<TrackPoint> track, int level, double width)
+    private static double Length(List<TrackPoint> track)
+    {
+        var length = 0.0;
+        for (var i = 1; i < track.Count; i++)
+        {
+            length += Math.Sqrt(Math.Pow(track[i].X - track[i - 1].X, 2) + Math.Pow(track[i].Y - track[i - 1].Y, 2));
+        }
+
+        return length;
+    }
+
+    /// <summary>The score of the best wider ribbon that shares one of the edges all along, over the track's own.</summary>
+    /// <remarks>A fibre is equally wide along its length: an edge of another fibre that happens to run beside it for a bit is no rival.</remarks>
+    internal double Rival(List<TrackPoint> track, int level, double width)
     {
         const int Stations = 7;
-        var shares = new List<double>();
+        var own = new List<(TrackPoint At, double Score)>();
         for (var s = 0; s < Stations; s++)
         {
             var at = track[track.Count * ((2 * s) + 1) / (2 * Stations)];
-            var own = _trackers[level].Score(at.X, at.Y, at.Normal, at.HalfWidth);
-            if (own > 0)
+            if (_trackers[level].Score(at.X, at.Y, at.Normal, at.HalfWidth) is var score and > 0)
             {
-                shares.Add(Math.Max(Wider(at, width, 1), Wider(at, width, -1)) / own);
+                own.Add((at, score));
             }
         }
 
-        return shares.Count == 0 ? 1 : Series.Median([.. shares]);
-    }
-
-    private double Wider(TrackPoint at, double width, int side)
-    {
-        var (sin, cos) = Math.SinCos(at.Normal);
-        var (edgeX, edgeY) = (at.X + (side * at.HalfWidth * cos), at.Y + (side * at.HalfWidth * sin));
-        var best = 0.0;
-        for (var wide = 2.2 * width; wide < Math.Min(_widest, 14 * width); wide *= 1.15)
+        var best = own.Count == 0 ? 1.0 : 0;
+        for (var wide = 2.2 * width; own.Count > 0 && wide < Math.Min(_widest, 14 * width); wide *= 1.15)
         {
-            var level = 0;
-            while (level < _trackers.Length - 1 && wide / (1 << level) > 13)
+            for (var side = -1; side <= 1; side += 2)
             {
-                level++;
+                best = Math.Max(best, Series.Median([.. own.Select(s => Wider(s.At, wide, side) / s.Score)]));
             }
-
-            var score = _trackers[level].Score(edgeX - (side * wide / 2 * cos), edgeY - (side * wide / 2 * sin), at.Normal, wide / 2);
-            best = Math.Max(best, score);
         }
 
         return best;
+    }
+
+    private double Wider(TrackPoint at, double wide, int side)
+    {
+        var (sin, cos) = Math.SinCos(at.Normal);
+        var (edgeX, edgeY) = (at.X + (side * at.HalfWidth * cos), at.Y + (side * at.HalfWidth * sin));
+        var level = 0;
+        while (level < _trackers.Length - 1 && wide / (1 << level) > 13)
+        {
+            level++;
+        }
+
+        return _trackers[level].Score(edgeX - (side * wide / 2 * cos), edgeY - (side * wide / 2 * sin), at.Normal, wide / 2);
     }
 
     /// <summary>Takes candidates by their evidence, and refuses one whose ground is mostly taken in its direction.</summary>

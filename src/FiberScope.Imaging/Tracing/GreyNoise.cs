@@ -13,4 +13,8 @@ internal sealed record GreyNoise(double Floor, double Stabilised)
     /// </summary>
     public static double SlopeShare(double along, double across) =>
         1 / Math.Sqrt(2 * Math.Sqrt(Math.PI) * Math.Max(0.7, along)) / Math.Sqrt(4 * Math.Sqrt(Math.PI) * Math.Pow(Math.Max(0.6, across), 3));
+
+    /// <summary>The share of the pixel noise left in a level, after Gaussian smoothing along and across; sigmas in pixels.</summary>
+    public static double LevelShare(double along, double across) =>
+        1 / Math.Sqrt(2 * Math.Sqrt(Math.PI) * Math.Max(0.5, along)) / Math.Sqrt(2 * Math.Sqrt(Math.PI) * Math.Max(0.5, across));
 }

@@ -8,9 +8,13 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
     /// <summary>How many stations were refused, by reason.</summary>
     public IReadOnlyDictionary<string, int> Refused => _refused;
 
+    public string?[] Reasons { get; private set; } = [];
+    public string? Whole_ { get; private set; }
+
     public Ribbon? Judge(RibbonStrip strip, double rival, double[] texture)
     {
         var rows = strip.Rows;
+        Reasons = new string?[rows];
         var width = 2 * Series.Median([.. Enumerable.Range(0, rows).Select(r => strip.Half[r])]);
         var looks = StripLook.Of(strip, width, noise);
         var accepted = new bool[rows];
@@ -18,6 +22,7 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         {
             var reason = texture[r] > settings.LargestTexture ? "edges-across-inside" : Reason(strip, looks, r, width);
             accepted[r] = reason is null;
+            Reasons[r] = reason;
             Count(reason);
         }
 
@@ -38,11 +43,13 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             if (accepted[r] && Math.Abs(taper[r]) > largestTaper)
             {
                 accepted[r] = false;
+                Reasons[r] = "edges-not-parallel";
                 Count("edges-not-parallel");
             }
             else if (accepted[r] && Math.Abs(widths[r] - median[r]) > (settings.LargestStep * median[r]) + 0.4)
             {
                 accepted[r] = false;
+                Reasons[r] = "uneven-width";
                 Count("uneven-width");
             }
         }
@@ -61,6 +68,7 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             : rival + Math.Abs(Series.Median([.. looks.Asymmetry.Where((_, r) => accepted[r])])) + 1 - share > 0.95 ? "rim-or-gap"
             : Series.Spread([.. widths.Where((_, r) => accepted[r])]) > 0.25 ? "uneven-width"
             : null;
+        Whole_ = why;
         if (why is not null)
         {
             _refused[why] = _refused.GetValueOrDefault(why) + Math.Max(1, count);
@@ -76,7 +84,7 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         var (low, high) = (Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]), Math.Max(looks.ContrastLeft[r], looks.ContrastRight[r]));
         var found = strip.Left.Offset[r] + strip.Right.Offset[r];
         return !strip.Left.Found[r] || !strip.Right.Found[r] || found < 1.5 ? "no-edge"
-            : low < settings.LeastFlankRatio * high || low < settings.FlankSignificance * noise.At(looks.Peak[r]) / Math.Max(1, 0.3 * width) ? "one-edge-hidden"
+            : low < settings.LeastFlankRatio * high || low < settings.FlankSignificance * noise.At(looks.Peak[r]) * GreyNoise.LevelShare(strip.Along, Math.Max(0.5, 0.015 * width)) ? "one-edge-hidden"
             : Math.Abs(strip.Right.Offset[r] - strip.Left.Offset[r]) > 0.4 * found ? "off-centre"
             : looks.Swing[r] >= settings.LargestSwing ? "edge-inside"
             : looks.Middle[r] - looks.Outside[r] <= settings.LeastSolid * Math.Max(looks.Peak[r] - looks.Outside[r], 1e-6) ? "dark-middle"

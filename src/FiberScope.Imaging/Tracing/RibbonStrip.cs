@@ -35,6 +35,9 @@ internal sealed class RibbonStrip
     /// <summary>Distance between rows; pixels.</summary>
     public double Step { get; }
 
+    /// <summary>How far <see cref="Smooth"/> is smoothed along the fibre; sigma in pixels.</summary>
+    public double Along { get; private set; }
+
     public double ColumnStep { get; }
 
     public int Rows { get; }
@@ -60,7 +63,7 @@ internal sealed class RibbonStrip
     public EdgeTrack Right { get; }
 
     /// <summary>Straightens a track and finds both edges; null when it is too short or shows no edges.</summary>
-    public static RibbonStrip? Of(Plane picture, List<TrackPoint> track, double width)
+    public static RibbonStrip? Of(Plane picture, List<TrackPoint> track, double width, GreyNoise noise)
     {
         var step = Math.Max(1, width / 12);
         var (x, y, half) = Resample(track, step);
@@ -71,20 +74,45 @@ internal sealed class RibbonStrip
 
         var k = Math.Max(1, 0.35 * width / step);
         var strip = new RibbonStrip(picture, width, Series.Smooth(x, k), Series.Smooth(y, k), Series.Smooth(half, 2 * k), step);
-        strip.Cut(1.5);
+        strip.Cut();
+        strip.SmoothAlong(1.5 * strip.Quiet(noise));
         strip.FindEdges(1);
         if (!strip.Recentre())
         {
             return null;
         }
 
-        strip.Cut(1);
+        strip.Cut();
+        strip.SmoothAlong(strip.Quiet(noise));
         strip.FindEdges(0.7);
         return strip;
     }
 
     /// <summary>The grey of the picture beside a row's centre, neither smoothed nor resampled; pixels.</summary>
     public float Grey(int row, double offset) => _picture.Sample((float)(X[row] + (offset * Nx[row])), (float)(Y[row] + (offset * Ny[row])));
+
+    /// <summary>How far along the fibre to smooth for its contrast to stand clear of the noise; sigma in pixels.</summary>
+    /// <remarks>Thin, dim fibres need more; about a third of the width is always averaged, twice the width at most.</remarks>
+    private double Quiet(GreyNoise noise)
+    {
+        const double Clear = 10;
+        var mean = new double[Columns];
+        for (var r = 0; r < Rows; r++)
+        {
+            for (var c = 0; c < Columns; c++)
+            {
+                mean[c] += Values[(r * Columns) + c] / (double)Rows;
+            }
+        }
+
+        var half = _width / 2;
+        var inside = Range(mean, -half, half).Average();
+        var outside = 0.5 * (Range(mean, half, half + Math.Max(2, 0.3 * half)).Min() + Range(mean, -half - Math.Max(2, 0.3 * half), -half).Min());
+        var ratio = noise.At(inside) / Math.Max(1e-3, inside - outside);
+        return Math.Clamp(Clear * ratio * ratio, Math.Max(0.7, 0.3 * _width), Math.Max(5, 1.2 * _width));
+    }
+
+    private double[] Range(double[] profile, double from, double to) => profile[Column(from)..(Column(to) + 1)];
 
     /// <summary>The smoothed value at an offset from the centre line; pixels.</summary>
     public float At(int row, double offset) => Smooth[(row * Columns) + Column(offset)];
@@ -119,7 +147,7 @@ internal sealed class RibbonStrip
         return (x, y, half);
     }
 
-    private void Cut(double smoothing)
+    private void Cut()
     {
         for (var r = 0; r < Rows; r++)
         {
@@ -133,8 +161,12 @@ internal sealed class RibbonStrip
                 Values[(r * Columns) + c] = _picture.Sample((float)(X[r] + (u * Nx[r])), (float)(Y[r] + (u * Ny[r])));
             }
         }
+    }
 
-        Series.SmoothRows(Values, Smooth, Rows, Columns, Math.Max(0.7, 0.3 * _width / Step * smoothing));
+    private void SmoothAlong(double sigma)
+    {
+        Along = sigma;
+        Series.SmoothRows(Values, Smooth, Rows, Columns, Math.Max(0.7, sigma / Step));
         Series.SmoothColumns(Smooth, Rows, Columns, Math.Max(0.5, 0.015 * _width) / ColumnStep);
         for (var r = 0; r < Rows; r++)
         {

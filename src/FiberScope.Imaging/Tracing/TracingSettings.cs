@@ -11,9 +11,9 @@ public sealed record TracingSettings
     /// <summary>The widest fibre looked for, as a share of the shorter side of the picture; 0.01 to 0.5. Default 0.25.</summary>
     public double WidestShare { get; init => field = Require.Within(value, 0.01, 0.5); } = 0.25;
 
-    /// <summary>How far along an edge its gradient is smoothed; level pixels, 1 to 6. Default 3.</summary>
+    /// <summary>How far along an edge its gradient is smoothed; level pixels, 1 to 6. Default 4.</summary>
     /// <remarks>Longer finds fainter fibres and loses curved ones.</remarks>
-    public double SmoothingAlong { get; init => field = Require.Within(value, 1, 6); } = 3;
+    public double SmoothingAlong { get; init => field = Require.Within(value, 1, 6); } = 4;
 
     /// <summary>How strongly an edge inside a pair of edges speaks against it; 0 to 2. Default 0.7.</summary>
     public double InsideWeight { get; init => field = Require.Within(value, 0, 2); } = 0.7;
@@ -21,14 +21,14 @@ public sealed record TracingSettings
     /// <summary>The least strength of an edge point, in standard deviations of the noise; 1 to 20. Default 3.</summary>
     public double EdgeSignificance { get; init => field = Require.Within(value, 1, 20); } = 3;
 
-    /// <summary>The least score of a seed, in standard deviations of the noise; 1 to 20. Default 4.5.</summary>
-    public double SeedSignificance { get; init => field = Require.Within(value, 1, 20); } = 4.5;
+    /// <summary>The least score of a seed, in standard deviations of the noise; 1 to 20. Default 3.8.</summary>
+    public double SeedSignificance { get; init => field = Require.Within(value, 1, 20); } = 3.8;
 
     /// <summary>The weaker flank must have this share of the stronger one's contrast; 0 to 1. Default 0.25.</summary>
     public double LeastFlankRatio { get; init => field = Require.Within(value, 0, 1); } = 0.25;
 
-    /// <summary>The least contrast of a flank, in standard deviations of the smoothed noise; 1 to 20. Default 3.</summary>
-    public double FlankSignificance { get; init => field = Require.Within(value, 1, 20); } = 3;
+    /// <summary>The least contrast of a flank, in standard deviations of the smoothed noise; 1 to 20. Default 4.</summary>
+    public double FlankSignificance { get; init => field = Require.Within(value, 1, 20); } = 4;
 
     /// <summary>The darkest inside must stay this share of the contrast above the outside; 0 to 1. Default 0.2.</summary>
     public double LeastSolid { get; init => field = Require.Within(value, 0, 1); } = 0.2;
