@@ -11,7 +11,7 @@ namespace FiberScope.Imaging;
 public static class FieldMeter
 {
     /// <summary>Name and version of the algorithm.</summary>
-    public const string Algorithm = "paired-edges@1";
+    public const string Algorithm = "paired-edges@2";
 
     /// <summary>Measures the fibres of a micrograph.</summary>
     /// <param name="micrograph">The picture.</param>

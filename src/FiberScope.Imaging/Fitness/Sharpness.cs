@@ -36,7 +36,7 @@ internal sealed record Sharpness(double BlurPixels, double ContrastToNoise)
         using var middle = new Mat(whole, new Rect((micrograph.Width - width) / 2, (micrograph.UsableHeight - height) / 2, width, height));
         var noise = Math.Max(Noise(middle), 1e-5);
         using var half = new Mat();
-        Cv2.Resize(middle, half, new Size(width / 2, height / 2), interpolation: InterpolationFlags.Area);
+        Cv2.Resize(middle, half, new Size(Math.Max(1, width / 2), Math.Max(1, height / 2)), interpolation: InterpolationFlags.Area);
 
         // Wide derivatives see nothing that half the pixels do not show; the mean of four pixels halves their noise.
         var answers = Widths.Select(s => s > Along ? Answer(half, s / 2, Along / 2, noise / 2) : Answer(middle, s, Along, noise)).ToArray();

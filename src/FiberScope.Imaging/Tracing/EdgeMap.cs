@@ -1,3 +1,4 @@
+using System.Numerics.Tensors;
 using OpenCvSharp;
 
 namespace FiberScope.Imaging.Tracing;
@@ -66,55 +67,78 @@ internal sealed class EdgeMap
         var (gx, gy) = (native.T(new Mat()), native.T(new Mat()));
         Cv2.Sobel(smooth, gx, MatType.CV_32F, 1, 0, 1, 0.5);
         Cv2.Sobel(smooth, gy, MatType.CV_32F, 0, 1, 1, 0.5);
+        var (climbX, climbY) = (Plane.FromMat(gx), Plane.FromMat(gy));
+        var mixed = new Plane(level.Width, level.Height);
         for (var k = 0; k < Directions; k++)
         {
             var (sin, cos) = Math.SinCos(Math.PI * k / Directions);
-            using var mixed = new Mat();
-            Cv2.AddWeighted(gx, cos, gy, sin, 0, mixed);
-            using var kernel = Kernel(cos, sin, along);
-            using var smoothed = new Mat();
-            Cv2.Filter2D(mixed, smoothed, MatType.CV_32F, kernel, borderType: BorderTypes.Replicate);
-            Keep(Plane.FromMat(smoothed).Data, k, strength.Data, direction);
+            TensorPrimitives.Multiply(climbX.Data, (float)cos, mixed.Data);
+            TensorPrimitives.MultiplyAdd(climbY.Data, (float)sin, mixed.Data, mixed.Data);
+            SmoothLine(mixed, Taps(cos, sin, along), k, strength, direction);
         }
     }
 
-    private static void Keep(float[] smoothed, int k, float[] strength, byte[] direction)
+    /// <summary>Smooths along a slanted line, row by row, and keeps what is stronger than in the directions before.</summary>
+    private static void SmoothLine(Plane mixed, (int X, int Y, float Weight)[] taps, int k, Plane strength, byte[] direction)
     {
+        var (width, height) = (mixed.Width, mixed.Height);
+        var sum = new float[width];
+        for (var y = 0; y < height; y++)
+        {
+            Array.Clear(sum);
+            foreach (var (x, down, weight) in taps)
+            {
+                var source = mixed.Data.AsSpan(Math.Clamp(y + down, 0, height - 1) * width, width);
+                var (from, count) = (Math.Max(0, -x), Math.Max(0, width - Math.Abs(x)));
+                var target = sum.AsSpan(from, count);
+                TensorPrimitives.MultiplyAdd(source.Slice(Math.Max(0, x), count), weight, target, target);
+            }
+
+            Keep(sum, k, strength.Data.AsSpan(y * width, width), direction.AsSpan(y * width, width));
+        }
+    }
+
+    private static void Keep(ReadOnlySpan<float> smoothed, int k, Span<float> strength, Span<byte> direction)
+    {
+        var (up, down) = ((byte)k, (byte)(k + Directions));
         for (var i = 0; i < smoothed.Length; i++)
         {
             var value = smoothed[i];
-            if (Math.Abs(value) > strength[i])
+            var size = Math.Abs(value);
+            if (size > strength[i])
             {
-                strength[i] = Math.Abs(value);
-                direction[i] = (byte)(value > 0 ? k : k + Directions);
+                strength[i] = size;
+                direction[i] = value > 0 ? up : down;
             }
         }
     }
 
-    private static Mat Kernel(double cos, double sin, double along)
+    /// <summary>A Gaussian along the edge: whole steps along the axis nearer to it, straight-line interpolation across that axis.</summary>
+    private static (int X, int Y, float Weight)[] Taps(double cos, double sin, double along)
     {
-        var reach = (int)Math.Ceiling(2 * along);
-        var size = (2 * reach) + 1;
-        var weights = new float[size * size];
+        var (alongX, alongY) = (-sin, cos);
+        var steep = Math.Abs(alongY) > Math.Abs(alongX);
+        var (major, slant) = steep ? (Math.Abs(alongY), alongX / alongY) : (Math.Abs(alongX), alongY / alongX);
+        var taps = new List<(int X, int Y, float Weight)>();
+        var reach = (int)Math.Ceiling(2 * along * major);
         var sum = 0.0;
-        for (var y = -reach; y <= reach; y++)
+        for (var step = -reach; step <= reach; step++)
         {
-            for (var x = -reach; x <= reach; x++)
+            var length = step / major;
+            var weight = Math.Exp(-0.5 * length * length / (along * along));
+            sum += weight;
+            var aside = step * slant;
+            var whole = (int)Math.Floor(aside);
+            foreach (var (place, share) in new[] { (whole, 1 - (aside - whole)), (whole + 1, aside - whole) })
             {
-                var (a, b) = ((x * cos) + (y * sin), (-x * sin) + (y * cos));
-                var weight = Math.Exp((-0.5 * b * b / (along * along)) - (0.5 * a * a / 0.25));
-                weights[((y + reach) * size) + x + reach] = (float)weight;
-                sum += weight;
+                if (share > 1e-3)
+                {
+                    taps.Add(steep ? (place, step, (float)(weight * share)) : (step, place, (float)(weight * share)));
+                }
             }
         }
 
-        for (var i = 0; i < weights.Length; i++)
-        {
-            weights[i] /= (float)sum;
-        }
-
-        using var view = Mat.FromPixelData(size, size, MatType.CV_32FC1, weights);
-        return view.Clone();
+        return [.. taps.Select(t => (t.X, t.Y, (float)(t.Weight / sum)))];
     }
 
     private static EdgePoint[] Thin(Plane strength, byte[] direction, float threshold, int[] index)

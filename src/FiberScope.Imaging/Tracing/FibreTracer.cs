@@ -92,9 +92,9 @@ internal sealed class FibreTracer
 
     /// <summary>The score of the best wider ribbon that shares one of the edges all along, over the track's own.</summary>
     /// <remarks>A fibre is equally wide along its length: an edge of another fibre that happens to run beside it for a bit is no rival.</remarks>
-    internal double Rival(List<TrackPoint> track, int level, double width)
+    private double Rival(List<TrackPoint> track, int level, double width)
     {
-        const int Stations = 7;
+        const int Stations = 5;
         var own = new List<(TrackPoint At, double Score)>();
         for (var s = 0; s < Stations; s++)
         {
@@ -106,7 +106,7 @@ internal sealed class FibreTracer
         }
 
         var best = own.Count == 0 ? 1.0 : 0;
-        for (var wide = 2.2 * width; own.Count > 0 && wide < Math.Min(_widest, 14 * width); wide *= 1.15)
+        for (var wide = 2.2 * width; own.Count > 0 && wide < Math.Min(_widest, 10 * width); wide *= 1.2)
         {
             for (var side = -1; side <= 1; side += 2)
             {
@@ -130,6 +130,21 @@ internal sealed class FibreTracer
         return _trackers[level].Score(edgeX - (side * wide / 2 * cos), edgeY - (side * wide / 2 * sin), at.Normal, wide / 2);
     }
 
+    /// <summary>Whether another fibre of the same direction holds ground anywhere between the edges: two fibres, or a part of one.</summary>
+    private static bool Taken(ClaimMap claims, RibbonStrip strip, int r, double width)
+    {
+        var normal = Math.Atan2(strip.Ny[r], strip.Nx[r]);
+        for (var share = -0.3; share <= 0.31; share += 0.15)
+        {
+            if (claims.Holds(strip.X[r] + (share * width * strip.Nx[r]), strip.Y[r] + (share * width * strip.Ny[r]), normal, 0.3))
+            {
+                return true;
+            }
+        }
+
+        return false;
+    }
+
     /// <summary>Takes candidates by their evidence, and refuses one whose ground is mostly taken in its direction.</summary>
     private List<Ribbon> Choose(List<Ribbon> candidates)
     {
@@ -144,7 +159,7 @@ internal sealed class FibreTracer
                 if (ribbon.Accepted[r])
                 {
                     all++;
-                    var taken = claims.Holds(strip.X[r], strip.Y[r], Math.Atan2(strip.Ny[r], strip.Nx[r]), 0.35);
+                    var taken = Taken(claims, strip, r, ribbon.Width);
                     free += taken ? 0 : 1;
                     ribbon.Accepted[r] = !taken;
                 }

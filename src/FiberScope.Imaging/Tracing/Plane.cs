@@ -44,6 +44,38 @@ internal sealed class Plane
         }
     }
 
+    /// <summary>Samples a straight line of equally spaced places.</summary>
+    public void SampleLine(float x, float y, float stepX, float stepY, Span<float> into)
+    {
+        var (endX, endY) = (x + (stepX * (into.Length - 1)), y + (stepY * (into.Length - 1)));
+        if (Math.Min(x, endX) < 0.01f || Math.Min(y, endY) < 0.01f || Math.Max(x, endX) > Width - 1.01f || Math.Max(y, endY) > Height - 1.01f)
+        {
+            for (var k = 0; k < into.Length; k++)
+            {
+                into[k] = Sample(x + (k * stepX), y + (k * stepY));
+            }
+
+            return;
+        }
+
+        // All places are inside: no clamping, and the array's bounds need no second look.
+        ref var origin = ref Data[0];
+        unchecked
+        {
+            for (var k = 0; k < into.Length; k++)
+            {
+                float px = x + (k * stepX), py = y + (k * stepY);
+                int i = (int)px, j = (int)py;
+                float fx = px - i, fy = py - j;
+                ref var first = ref Unsafe.Add(ref origin, (j * Width) + i);
+                ref var below = ref Unsafe.Add(ref first, Width);
+                var top = first + (fx * (Unsafe.Add(ref first, 1) - first));
+                var bottom = below + (fx * (Unsafe.Add(ref below, 1) - below));
+                into[k] = top + (fy * (bottom - top));
+            }
+        }
+    }
+
     /// <summary>A native copy; the caller disposes it.</summary>
     public Mat ToMat()
     {

@@ -11,7 +11,7 @@ internal sealed class Ribbon(RibbonStrip strip, bool[] accepted, double[] widths
     /// <summary>For each row the width between the edges, running median where accepted; pixels.</summary>
     public double[] Widths { get; } = widths;
 
-    /// <summary>How much speaks for the ribbon: contrast times the root of its accepted length over its width.</summary>
+    /// <summary>How much speaks for the ribbon: contrast times the root of its accepted length, less for wide claims and rivals.</summary>
     public double Evidence { get; } = evidence;
 
     public double Width { get; } = Series.Median([.. widths.Where((_, r) => accepted[r])]);

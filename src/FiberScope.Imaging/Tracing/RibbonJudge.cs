@@ -3,18 +3,17 @@ namespace FiberScope.Imaging.Tracing;
 /// <summary>Decides where a straightened fibre may be read, and whether it is one fibre at all.</summary>
 internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
 {
+    /// <summary>The wider the claim, the more evidence it needs: two fibres side by side look wide, one fibre never looks like two thin ones.</summary>
+    private const double WidthDoubt = 0.4;
+
     private readonly SortedDictionary<string, int> _refused = new(StringComparer.Ordinal);
 
     /// <summary>How many stations were refused, by reason.</summary>
     public IReadOnlyDictionary<string, int> Refused => _refused;
 
-    public string?[] Reasons { get; private set; } = [];
-    public string? Whole_ { get; private set; }
-
     public Ribbon? Judge(RibbonStrip strip, double rival, double[] texture)
     {
         var rows = strip.Rows;
-        Reasons = new string?[rows];
         var width = 2 * Series.Median([.. Enumerable.Range(0, rows).Select(r => strip.Half[r])]);
         var looks = StripLook.Of(strip, width, noise);
         var accepted = new bool[rows];
@@ -22,7 +21,6 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         {
             var reason = texture[r] > settings.LargestTexture ? "edges-across-inside" : Reason(strip, looks, r, width);
             accepted[r] = reason is null;
-            Reasons[r] = reason;
             Count(reason);
         }
 
@@ -43,18 +41,17 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             if (accepted[r] && Math.Abs(taper[r]) > largestTaper)
             {
                 accepted[r] = false;
-                Reasons[r] = "edges-not-parallel";
                 Count("edges-not-parallel");
             }
             else if (accepted[r] && Math.Abs(widths[r] - median[r]) > (settings.LargestStep * median[r]) + 0.4)
             {
                 accepted[r] = false;
-                Reasons[r] = "uneven-width";
                 Count("uneven-width");
             }
         }
 
         Runs.Keep(accepted, (int)(0.5 * width / strip.Step), least);
+        Runs.Trim(accepted, (int)Math.Round(0.5 * strip.Along / strip.Step));
         return Whole(strip, looks, accepted, widths, width, rival);
     }
 
@@ -68,7 +65,6 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             : rival + Math.Abs(Series.Median([.. looks.Asymmetry.Where((_, r) => accepted[r])])) + 1 - share > 0.95 ? "rim-or-gap"
             : Series.Spread([.. widths.Where((_, r) => accepted[r])]) > 0.25 ? "uneven-width"
             : null;
-        Whole_ = why;
         if (why is not null)
         {
             _refused[why] = _refused.GetValueOrDefault(why) + Math.Max(1, count);
@@ -76,7 +72,7 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         }
 
         var contrast = Series.Median([.. Enumerable.Range(0, accepted.Length).Where(r => accepted[r]).Select(r => Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]))]);
-        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast * Math.Sqrt(length) * (1 - (0.5 * rival)));
+        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast * Math.Sqrt(length) * Math.Pow(width, -WidthDoubt) * (1 - (0.5 * rival)));
     }
 
     private string? Reason(RibbonStrip strip, StripLook looks, int r, double width)

@@ -1,3 +1,5 @@
+using System.Numerics.Tensors;
+
 namespace FiberScope.Imaging.Tracing;
 
 /// <summary>A step along a followed fibre, in pixels of the full picture (first pixel's centre at 0).</summary>
@@ -97,18 +99,23 @@ internal sealed class RibbonTracker
     /// <summary>Tries a few directions; in each the profile itself says where the two edges are.</summary>
     private State Improve(State guess, float threshold)
     {
-        var best = guess with { Score = float.NegativeInfinity };
-        for (var a = -2; a <= 2; a++)
+        var (left, straight, right) = (Turned(guess, -1, threshold), Turned(guess, 0, threshold), Turned(guess, 1, threshold));
+        var best = straight;
+        if (left.Score > best.Score || right.Score > best.Score)
         {
-            var tried = Measure(guess with { Normal = guess.Normal + (a * TurnStep) });
-            var value = tried.Score - (threshold * 0.05f * a * a);
-            if (value > best.Score)
-            {
-                best = tried with { Score = value };
-            }
+            // The better side leads further; most steps need no such look.
+            best = left.Score > right.Score ? left : right;
+            var further = Turned(guess, left.Score > right.Score ? -2 : 2, threshold);
+            best = further.Score > best.Score ? further : best;
         }
 
         return best;
+    }
+
+    private State Turned(State guess, int turns, float threshold)
+    {
+        var tried = Measure(guess with { Normal = guess.Normal + (turns * TurnStep) });
+        return tried with { Score = tried.Score - (threshold * 0.05f * turns * turns) };
     }
 
     /// <summary>Averages a short straight piece along the fibre and finds the two edges on the mean profile.</summary>
@@ -155,12 +162,9 @@ internal sealed class RibbonTracker
             var weight = MathF.Exp(-0.5f * along * along / (spread * spread));
             var (x, y) = (at.X - (along * sin) - (reach * SampleStep * cos), at.Y + (along * cos) - (reach * SampleStep * sin));
             total += weight;
-            for (var i = 0; i < count; i++)
-            {
-                _profile[i] += weight * _level.Sample(x, y);
-                x += SampleStep * cos;
-                y += SampleStep * sin;
-            }
+            var line = _slope.AsSpan(0, count);
+            _level.SampleLine(x, y, SampleStep * cos, SampleStep * sin, line);
+            TensorPrimitives.MultiplyAdd(line, weight, _profile.AsSpan(0, count), _profile.AsSpan(0, count));
         }
 
         for (var i = 0; i < count; i++)

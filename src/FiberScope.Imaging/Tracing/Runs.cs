@@ -32,6 +32,29 @@ internal static class Runs
         }
     }
 
+    /// <summary>Takes rows off both ends of every run, where what lies beside it was smoothed in; at least three stay.</summary>
+    public static void Trim(bool[] accepted, int rows)
+    {
+        var start = 0;
+        while (start < accepted.Length)
+        {
+            var end = start;
+            while (end < accepted.Length && accepted[end])
+            {
+                end++;
+            }
+
+            var off = Math.Min(rows, (end - start - 3) / 2);
+            if (off > 0)
+            {
+                Array.Fill(accepted, false, start, off);
+                Array.Fill(accepted, false, end - off, off);
+            }
+
+            start = end + 1;
+        }
+    }
+
     /// <summary>The running median over accepted rows; the value itself where a row is not accepted.</summary>
     public static double[] Median(double[] values, bool[] accepted, double window)
     {

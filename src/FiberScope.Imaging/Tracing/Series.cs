@@ -62,22 +62,18 @@ internal static class Series
     {
         var kernel = Kernel(sigma);
         var reach = kernel.Length / 2;
-        var line = new float[columns];
+        var padded = new float[columns + (2 * reach)];
         for (var r = 0; r < rows; r++)
         {
             var row = values.AsSpan(r * columns, columns);
-            for (var c = 0; c < columns; c++)
+            row.CopyTo(padded.AsSpan(reach));
+            padded.AsSpan(0, reach).Fill(row[0]);
+            padded.AsSpan(reach + columns).Fill(row[^1]);
+            row.Clear();
+            for (var k = 0; k < kernel.Length; k++)
             {
-                var sum = 0.0;
-                for (var k = -reach; k <= reach; k++)
-                {
-                    sum += kernel[k + reach] * row[Math.Clamp(c + k, 0, columns - 1)];
-                }
-
-                line[c] = (float)sum;
+                System.Numerics.Tensors.TensorPrimitives.MultiplyAdd(padded.AsSpan(k, columns), (float)kernel[k], row, row);
             }
-
-            line.CopyTo(row);
         }
     }
 

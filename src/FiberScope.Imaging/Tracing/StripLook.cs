@@ -45,8 +45,8 @@ internal sealed class StripLook
         for (var r = 0; r < strip.Rows; r++)
         {
             look.Levels(strip, r, width);
-            var slopeNoise = noise.At(look.Peak[r]) * GreyNoise.SlopeShare(0.46 * width, Math.Max(0.5, 0.015 * width));
-            swing[r] = clear * width > 2.5 ? Math.Max(0, Largest(strip, slopes, r, clear) - (3 * slopeNoise)) : 0;
+            var slopeNoise = noise.At(look.Peak[r]) * GreyNoise.SlopeShare(Math.Sqrt((strip.Along * strip.Along) + (0.1225 * width * width)), Math.Max(0.5, 0.015 * width));
+            swing[r] = clear * width > 2.5 ? Math.Max(0, Largest(strip, slopes, r, clear) - (2 * slopeNoise)) : 0;
         }
 
         var smooth = Series.Smooth(swing, Math.Max(0.7, 0.4 * width / strip.Step));
