@@ -178,6 +178,6 @@ internal sealed class FibreTracer
             chosen.Add(ribbon);
         }
 
-        return chosen;
+        return Streaks.Removed(chosen, _picture.Linear.Width, _picture.Linear.Height);
     }
 }

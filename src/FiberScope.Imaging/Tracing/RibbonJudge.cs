@@ -60,7 +60,12 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         var count = accepted.Count(a => a);
         var length = count * strip.Step;
         var share = count / (double)accepted.Length;
-        var why = length < Math.Max(12, width) ? "too-short"
+        var contrast = count == 0 ? 0 : Series.Median([.. Enumerable.Range(0, accepted.Length).Where(r => accepted[r]).Select(r => Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]))]);
+        var peak = Series.Median([.. looks.Peak.Where((_, r) => accepted[r])]);
+        var sure = settings.RibbonSignificance * noise.At(peak) * GreyNoise.LevelShare(strip.Along, Math.Max(0.5, 0.015 * width));
+        var why = count > 0 && contrast < sure ? "faint"
+            : count > 0 && Series.Median([.. widths.Where((_, r) => accepted[r])]) < settings.Narrowest ? "too-thin"
+            : length < Math.Max(12, width) ? "too-short"
             : share < settings.LeastAccepted ? "mostly-hidden"
             : rival + Math.Abs(Series.Median([.. looks.Asymmetry.Where((_, r) => accepted[r])])) + 1 - share > 0.95 ? "rim-or-gap"
             : Series.Spread([.. widths.Where((_, r) => accepted[r])]) > 0.25 ? "uneven-width"
@@ -71,7 +76,6 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             return null;
         }
 
-        var contrast = Series.Median([.. Enumerable.Range(0, accepted.Length).Where(r => accepted[r]).Select(r => Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]))]);
         return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast * Math.Sqrt(length) * Math.Pow(width, -WidthDoubt) * (1 - (0.5 * rival)));
     }
 

@@ -44,6 +44,10 @@ public sealed record TracingSettings
     /// <summary>How far a reading may stand from the running median of its trace, as a share of it; 0.01 to 1. Default 0.1.</summary>
     public double LargestStep { get; init => field = Require.Within(value, 0.01, 1); } = 0.1;
 
+    /// <summary>The least contrast of a whole ribbon, in standard deviations of the smoothed noise of one row; 1 to 30. Default 6.</summary>
+    /// <remarks>A picture has millions of places where noise could look like a thin fibre: one row in doubt is bearable, a ribbon is not.</remarks>
+    public double RibbonSignificance { get; init => field = Require.Within(value, 1, 30); } = 6;
+
     /// <summary>How fast the width may change along a fibre, per length; 0.01 to 1. Default 0.09.</summary>
     /// <remarks>Two fibres that meet at a small angle look like one that tapers: 0.09 is an angle of five degrees.</remarks>
     public double LargestTaper { get; init => field = Require.Within(value, 0.01, 1); } = 0.09;
