@@ -41,6 +41,12 @@ public sealed record MediaForecast
     /// <summary>What the uncertain inputs leave open; null when no uncertainties were given.</summary>
     public MeasurementUncertainty? Uncertainty { get; init; }
 
+    /// <summary>
+    /// The share of the air past the medium that would double the penetration at the most-penetrating size, and so halve protection;
+    /// dimensionless, at most 1.
+    /// </summary>
+    public double LeakShareThatHalvesProtection => Leakage.HalvingShare(PenetrationAtMostPenetratingSize);
+
     /// <summary>Share of the air that goes past the medium at its edge; dimensionless, zero without a gap.</summary>
     public double EdgeLeakShare { get; init; }
 

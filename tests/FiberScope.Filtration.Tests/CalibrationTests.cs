@@ -44,6 +44,23 @@ public sealed class CalibrationTests
     public void Rolls_without_any_measurement_are_refused() =>
         Assert.Throws<ArgumentException>(() => GradeCalibration.Fit("invented", [new CalibrationRoll("1", [Layer(3e-6, 0.08, 3e-4)], At(0.05), null, [])]));
 
+    [Theory]
+    [InlineData(1e-5)]
+    [InlineData(6e-5)]
+    public void A_pair_of_penetrations_gives_the_charge_back(double charge)
+    {
+        var layer = Layer(4e-6, 0.08, 3e-4);
+        var charged = layer with { Charge = new FibreCharge(ElectricSurfaceChargeDensity.FromCoulombsPerSquareMeter(charge)) };
+        double P(MediaLayer medium) => MediaModel.Forecast([medium], At(0.05, 3e-7)).Curve[0].Penetration;
+        var found = ChargeInference.FromPair([layer], At(0.05), Length.FromNanometers(300), P(charged), P(layer));
+        Assert.Equal(charge, found.Charge.SurfaceDensity.CoulombsPerSquareMeter, 1e-4 * charge);
+        Assert.InRange(found.RelativeUncertainty, 0.01, 1);
+    }
+
+    [Fact]
+    public void A_medium_that_passes_no_more_discharged_shows_no_charge() =>
+        Assert.Contains(ChargeInference.FromPair([Layer(4e-6, 0.08, 3e-4)], At(0.05), Length.FromNanometers(300), 0.5, 0.45).Caveats, c => c.Code == "no-charge-seen");
+
     // d² = f(α) μ U t / Δp, so the diameter put into Davies' law comes back.
     [Fact]
     public void Effective_diameter_inverts_Davies_law()

@@ -46,6 +46,16 @@ public sealed class ClassTests
     public void Every_class_names_its_edition_and_where_its_limits_are_from() =>
         Assert.All(MediaClasses.Judge([Layer(2.5e-6, 0.07, 4e-4)], At(0.09)), c => Assert.True(c.Edition.Length > 3 && c.Provenance.Length > 3 && c.NotJudged.Length > 3));
 
+    // Count median 75 nm and GSD 1.86 (42 CFR 84, from memory); mass median 238 nm (read in PMC10474009, table 1).
+    [Fact]
+    public void Published_test_aerosols_can_be_had_by_name()
+    {
+        var salt = TestAerosol.Published.Single(a => a.Id == "cfr84-salt");
+        Assert.Equal(238, HatchChoate.Median(salt.Aerosol.CountMedian, salt.Aerosol.GeometricStandardDeviation, 3).Nanometers, 1.0);
+        Assert.Equal(85, salt.Flow!.Value.LitersPerMinute, 1e-9);
+        Assert.All(TestAerosol.Published, a => Assert.NotEmpty(a.Provenance));
+    }
+
     [Fact]
     public void A_charge_does_not_help_where_the_test_takes_it_off()
     {

@@ -51,6 +51,15 @@ public sealed class DesignTests
     }
 
     [Fact]
+    public void A_fine_layer_may_take_a_larger_share_of_the_same_weight()
+    {
+        var design = new MediaDesign([Layer(1e-6, 0.06, 1e-4), Layer(1.5e-5, 0.1, 5e-4)], At(0.053), new DesignTargets(), [new DesignVariable(DesignKind.WeightShare, 0, new Interval(0.05, 0.5))], Polypropylene, new ForecastSettings { Draws = 0 });
+        var tried = design.Search(2, 2).OrderBy(c => c.Values[0]).ToArray();
+        Assert.Equal(tried[0].BasisWeight.GramsPerSquareMeter, tried[^1].BasisWeight.GramsPerSquareMeter, 1e-9);
+        Assert.True(tried[0].PenetrationAtMostPenetratingSize > tried[^1].PenetrationAtMostPenetratingSize);
+    }
+
+    [Fact]
     public void A_design_without_variables_is_refused() =>
         Assert.Throws<ArgumentException>(() => new MediaDesign([Start], At(0.05), new DesignTargets(), [], Polypropylene));
 

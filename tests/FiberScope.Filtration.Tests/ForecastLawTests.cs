@@ -18,7 +18,7 @@ public sealed class ForecastLawTests
         from thickness in Gen.Double[-5, -2.8]
         from velocity in Gen.Double[0.006, 0.4]
         from particle in Gen.Double[-8, -5]
-        from set in Gen.Int[0, 2].Select(i => (CorrelationSet)i)
+        from set in Gen.Int[0, 3].Select(i => (CorrelationSet)i)
         select (Layer(Math.Pow(10, fibre), solidity, Math.Pow(10, thickness)), velocity, Math.Pow(10, particle), set);
 
     [Fact]
@@ -62,7 +62,7 @@ public sealed class ForecastLawTests
 
     [Fact]
     public void The_most_penetrating_size_falls_with_velocity_while_diffusion_meets_interception() =>
-        Gen.Select(Gen.Double[0.5e-6, 5e-6], Gen.Double[0.02, 0.15], Gen.Double[0.01, 0.1], Gen.Int[0, 2].Select(i => (CorrelationSet)i)).Sample(
+        Gen.Select(Gen.Double[0.5e-6, 5e-6], Gen.Double[0.02, 0.15], Gen.Double[0.01, 0.1], Gen.Int[0, 3].Select(i => (CorrelationSet)i)).Sample(
             (fibre, solidity, velocity, set) =>
             {
                 double Size(double u) => MediaModel.Forecast([Layer(fibre, solidity, 3e-4)], At(u, 3e-7), Set(set)).MostPenetratingSize!.Value.Meters;
@@ -104,6 +104,7 @@ public sealed class ForecastLawTests
     [InlineData(CorrelationSet.KirschStechkina1978)]
     [InlineData(CorrelationSet.LeeLiu1982)]
     [InlineData(CorrelationSet.Hinds1999)]
+    [InlineData(CorrelationSet.Cell)]
     public void The_curve_has_no_jumps(CorrelationSet set)
     {
         const int Steps = 6000;

@@ -1,3 +1,4 @@
+using FiberScope.Filtration.Drag;
 using UnitsNet;
 using static FiberScope.Filtration.Tests.Media;
 
@@ -78,5 +79,16 @@ public sealed class ForecastTests
         var uneven = MediaModel.Forecast([layer with { InhomogeneityFactor = 1.5 }], At(0.05, 5e-8));
         Assert.Equal(even.PressureDrop.Pascals / 1.5, uneven.PressureDrop.Pascals, 1e-9);
         Assert.Equal(even.MinusLogP() / 1.5, uneven.MinusLogP(), 0.02);
+    }
+
+    // The values of dP_davies_fan_slip and of the laws' dimensionless drags, through the medium's own sum.
+    [Fact]
+    public void Laws_of_resistance_stand_side_by_side()
+    {
+        var laws = PressureDropLaws.All([Layer(2e-6, 0.08, 3e-4)], At(0.053));
+        Assert.Equal(96.7379163828812, laws["davies-1952-with-fan-slip"].Pascals, 1e-3);
+        Assert.True(laws["davies-1952"] > laws["davies-1952-with-fan-slip"]);
+        Assert.True(laws["kuwabara-1959-with-slip"] > laws["random-in-space-spielman-goren-1968"]);
+        Assert.True(laws.Count >= 5);
     }
 }

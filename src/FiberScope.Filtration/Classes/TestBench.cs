@@ -36,7 +36,7 @@ internal sealed class TestBench(IReadOnlyList<MediaLayer> layers, OperatingPoint
         return test.Kind switch
         {
             "mpps" => MostPenetrating(at),
-            "aerosol" => Penetration(test, at, Aerosol(test).Shares()),
+            "aerosol" => Penetration(test, at, TestAerosol.AerosolOf(test).Shares()),
             "band" => Penetration(test, at, Band(test)),
             "epm" => Penetration(test, at, [.. AmbientDust.Channels(Length.FromMicrometers(test.UpperMicrometres)).Select(c => (c.Size.Meters, c.Weight))]),
             _ => throw new InvalidOperationException($"The table of classes names an unknown kind of test, '{test.Kind}'."),
@@ -96,9 +96,6 @@ internal sealed class TestBench(IReadOnlyList<MediaLayer> layers, OperatingPoint
     private static double Deviation(Statistics.Interval? penetration) => penetration is { } band
         ? (TestOutcome.OfPenetration(band.Low) - TestOutcome.OfPenetration(band.High)) / 3.92
         : 0;
-
-    private static ChallengeAerosol Aerosol(ClassTest test) =>
-        new(Length.FromNanometers(test.CountMedianNanometres), test.Gsd, test.CountedBy) { RefractiveIndex = test.RefractiveIndex };
 
     private static (double Metres, double Share)[] Band(ClassTest test) =>
     [

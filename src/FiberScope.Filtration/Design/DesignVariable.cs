@@ -37,8 +37,23 @@ public sealed record DesignVariable
         ? Range.Low * Math.Pow(Range.High / Range.Low, share)
         : Range.Low + (share * Range.Width);
 
-    /// <summary>The layer with this variable at a value; what the change keeps is named at each kind.</summary>
-    internal MediaLayer Put(MediaLayer layer, double value, Density fibreDensity) => Kind switch
+    /// <summary>The layers with this variable at a value; what the change keeps is named at each kind.</summary>
+    internal MediaLayer[] PutInto(MediaLayer[] layers, double value, Density fibreDensity)
+    {
+        if (Kind != DesignKind.WeightShare)
+        {
+            return [.. layers.Select((l, i) => i == Layer ? Put(l, value, fibreDensity) : l)];
+        }
+
+        var fibre = layers.Select(l => l.Solidity.Fraction * l.Thickness.Meters).ToArray();
+        var (total, own) = (fibre.Sum(), fibre[Layer]);
+        var others = total - own;
+        return others <= 0
+            ? layers
+            : [.. layers.Select((l, i) => l with { Thickness = l.Thickness * (i == Layer ? value * total / own : (1 - value) * total / others) })];
+    }
+
+    private MediaLayer Put(MediaLayer layer, double value, Density fibreDensity) => Kind switch
     {
         DesignKind.MedianDiameter => layer with { Diameters = Scaled(layer.Diameters, value / Median(layer.Diameters)) },
         DesignKind.DiameterGsd => layer with { Diameters = DiameterDistribution.LogNormal(Length.FromMeters(Median(layer.Diameters)), Math.Max(1.0001, value)) },
@@ -75,4 +90,7 @@ public enum DesignKind
 
     /// <summary>The fibre charge, C/m².</summary>
     Charge,
+
+    /// <summary>The layer's share of the basis weight of all layers, dimensionless; their sum and every solidity are kept.</summary>
+    WeightShare,
 }

@@ -113,10 +113,10 @@ public sealed class MediaDesign
     {
         var values = _variables.Zip(shares, (v, s) => v.At(s)).ToImmutableArray();
         var layers = _start.ToArray();
-        foreach (var (variable, value) in _variables.Zip(values).OrderBy(p => p.First.Kind == DesignKind.BasisWeight ? 1 : 0))
+        foreach (var (variable, value) in _variables.Zip(values).OrderBy(p => p.First.Kind switch { DesignKind.WeightShare => 2, DesignKind.BasisWeight => 1, _ => 0 }))
         {
-            // Weight last: it sets the thickness for whatever solidity was chosen.
-            layers[variable.Layer] = variable.Put(layers[variable.Layer], value, _fibreDensity);
+            // Weight late: it sets the thickness for whatever solidity was chosen, and shares divide the weight that came of it.
+            layers = variable.PutInto(layers, value, _fibreDensity);
         }
 
         var medium = new MediumModel(layers, _point, _model);
