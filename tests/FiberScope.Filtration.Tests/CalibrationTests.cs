@@ -14,6 +14,7 @@ public sealed class CalibrationTests
         var fit = GradeCalibration.Fit("invented", [.. new[] { 2.5e-6, 3e-6, 3.6e-6 }.Select(d => Roll(d, 1.4, 0.3, 2e-5))]);
         Assert.Equal(1.4, fit.InhomogeneityFactor, 0.02);
         Assert.Equal(0.3, fit.BasisWeightVariation, 0.02);
+        Assert.InRange(fit.OpenArea, 0, 1e-5);
         Assert.Equal(20, fit.Charge.CoulombsPerSquareMeter * 1e6, 0.5);
         Assert.InRange(fit.LeaveOneOutPenetrationError!.Value, 0, 0.01);
         Assert.InRange(fit.LeaveOneOutPressureDropError!.Value, 0, 0.01);
@@ -29,6 +30,15 @@ public sealed class CalibrationTests
         Assert.Equal(roll.PressureDrop!.Value.Pascals, forecast.PressureDrop.Pascals, 0.5);
         Assert.All(forecast.Curve, c => Assert.NotNull(c.MeasurementBand));
         Assert.Contains(fit.Caveats, c => c.Code == "few-rolls");
+    }
+
+    [Fact]
+    public void Holes_that_pass_large_particles_are_found_beside_unevenness()
+    {
+        var fit = GradeCalibration.Fit("invented", [Roll(3e-6, 1.4, 0.2, 2e-5, 2e-3)]);
+        Assert.Equal(2e-3, fit.OpenArea, 3e-4);
+        Assert.Equal(0.2, fit.BasisWeightVariation, 0.05);
+        Assert.Equal(20, fit.Charge.CoulombsPerSquareMeter * 1e6, 1.0);
     }
 
     [Fact]
@@ -79,10 +89,10 @@ public sealed class CalibrationTests
     public void A_mismatch_of_diameters_names_its_likely_reason(double byFlow, double variation, string code) =>
         Assert.Contains(EffectiveDiameter.Compare(Length.FromMicrometers(byFlow), Layer(12e-6, 0.1, 1e-3).Diameters, 0, variation), c => c.Code == code);
 
-    private static CalibrationRoll Roll(double fibre, double inhomogeneity, double variation, double charge)
+    private static CalibrationRoll Roll(double fibre, double inhomogeneity, double variation, double charge, double openArea = 0)
     {
         var structure = Layer(fibre, 0.08, 3e-4);
-        var bare = structure with { InhomogeneityFactor = inhomogeneity, BasisWeightVariation = variation };
+        var bare = structure with { InhomogeneityFactor = inhomogeneity, BasisWeightVariation = variation, Holes = openArea > 0 ? [new Pinholes(Length.FromMillimeters(0.2), openArea)] : [] };
         var charged = bare with { Charge = new FibreCharge(ElectricSurfaceChargeDensity.FromCoulombsPerSquareMeter(charge)) };
         var point = At(0.053, Sizes);
         var (with, without) = (MediaModel.Forecast([charged], point), MediaModel.Forecast([bare], point));

@@ -9,14 +9,16 @@ namespace FiberScope.Filtration;
 /// <summary>The arithmetic behind <see cref="GradeCalibration.Fit"/>.</summary>
 /// <remarks>
 /// One parameter after the other, each from the data that shows it best: ε from pressure drops (all rolls in the mean of ln ε); the
-/// variation of basis weight from discharged penetrations, or from all when none are charged; the charge from penetrations as received.
-/// ε is fitted with the variation in place, since an uneven mat has less drag. Least squares in P, where counting noise is even.
+/// variation of basis weight and the open area from discharged penetrations, or from all when none were discharged; the charge from penetrations as
+/// received. ε is fitted with the unevenness in place, since an uneven mat has less drag. Least squares in P, where counting noise is even.
 /// </remarks>
 internal sealed class CalibrationFit
 {
-    private const double LargestVariation = 0.8;
     private const double LargestCharge = 500e-6;
     private const double LeastRelative = 0.02;
+
+    /// <summary>Relative spread of ε from roll to roll where one roll cannot show it; a guess.</summary>
+    private const double SpreadOfOneRoll = 0.1;
 
     private readonly string _grade;
     private readonly IReadOnlyList<CalibrationRoll> _rolls;
@@ -36,16 +38,6 @@ internal sealed class CalibrationFit
         _model = SingleFibreModel.Of(settings.Correlations);
     }
 
-    /// <summary>A layer with the grade's factors in place of its own.</summary>
-    public static MediaLayer With(MediaLayer layer, double? inhomogeneity, double variation, double coulombsPerSquareMetre) => layer with
-    {
-        InhomogeneityFactor = inhomogeneity,
-        BasisWeightVariation = variation,
-        Charge = coulombsPerSquareMetre > 0
-            ? new FibreCharge(ElectricSurfaceChargeDensity.FromCoulombsPerSquareMeter(coulombsPerSquareMetre), layer.Charge?.FibrePermittivity ?? 2.3)
-            : null,
-    };
-
     public GradeCalibration Run()
     {
         var fit = Parameters(_rolls);
@@ -57,10 +49,11 @@ internal sealed class CalibrationFit
             Grade = _grade,
             Rolls = [.. _rolls.Select(r => r.Name)],
             Correlations = _settings.Correlations,
-            InhomogeneityFactor = fit.Inhomogeneity,
+            InhomogeneityFactor = fit.Factors.Inhomogeneity,
             InhomogeneityRelativeUncertainty = fit.InhomogeneityRelative,
-            BasisWeightVariation = fit.Variation,
-            Charge = ElectricSurfaceChargeDensity.FromCoulombsPerSquareMeter(fit.Charge),
+            BasisWeightVariation = fit.Factors.Variation,
+            OpenArea = fit.Factors.OpenArea,
+            Charge = ElectricSurfaceChargeDensity.FromCoulombsPerSquareMeter(fit.Factors.CoulombsPerSquareMetre),
             ChargeRelativeUncertainty = fit.ChargeRelative,
             LeaveOneOutPenetrationError = RootMeanSquare(penetrationErrors),
             LeaveOneOutPressureDropError = RootMeanSquare(pressureErrors),
@@ -78,28 +71,28 @@ internal sealed class CalibrationFit
             return ([], []);
         }
 
-        var fit = Parameters(others);
-        var pressure = roll.PressureDrop is { } measured ? [(Medium(roll, fit.Inhomogeneity, fit.Variation, 0).Pascals / measured.Pascals) - 1] : Array.Empty<double>();
-        return (Residuals(roll, fit.Inhomogeneity, fit.Variation, fit.Charge, _ => true), pressure);
+        var factors = Parameters(others).Factors;
+        var pressure = roll.PressureDrop is { } measured ? [(Medium(roll, factors with { CoulombsPerSquareMetre = 0 }).Pascals / measured.Pascals) - 1] : Array.Empty<double>();
+        return (Residuals(roll, factors, _ => true), pressure);
     }
 
     private Fitted Parameters(IReadOnlyList<CalibrationRoll> rolls)
     {
-        var shape = rolls.SelectMany(r => r.Penetrations).Any(p => p.Discharged);
-        var received = rolls.SelectMany(r => r.Penetrations).Any(p => !p.Discharged);
-        double Variation(double charge, Func<RigPenetration, bool> used) => Minimum(
-            c => Squares(rolls, Inhomogeneity(rolls, c).Factor, c, charge, used), 0, LargestVariation);
-        var variation = shape ? Variation(0, p => p.Discharged) : received ? Variation(0, _ => true) : 0;
-        var (factor, relative) = Inhomogeneity(rolls, variation);
-        var (charge, chargeRelative) = shape && received ? Charge(rolls, factor, variation) : (0, 0);
-        return new Fitted(factor, relative, variation, charge, chargeRelative);
+        var all = rolls.SelectMany(r => r.Penetrations).ToArray();
+        var (discharged, received) = (all.Any(p => p.Discharged), all.Any(p => !p.Discharged));
+        double Misfit(double variation, double openArea) =>
+            Squares(rolls, new GradeFactors(Inhomogeneity(rolls, variation, openArea).Factor, variation, openArea, 0), p => p.Discharged || !discharged);
+        var (variation, openArea) = all.Length > 1 ? UnevennessSearch.Best(Misfit) : (0, 0);
+        var (factor, relative) = Inhomogeneity(rolls, variation, openArea);
+        var factors = new GradeFactors(factor, variation, openArea, 0);
+        var (charge, chargeRelative) = discharged && received ? Charge(rolls, factors) : (0, 0);
+        return new Fitted(factors with { CoulombsPerSquareMetre = charge }, relative, chargeRelative);
     }
 
     /// <summary>ε of all rolls: the mean of ln ε, and the spread of the rolls about it.</summary>
-    private (double Factor, double Relative) Inhomogeneity(IReadOnlyList<CalibrationRoll> rolls, double variation)
+    private (double Factor, double Relative) Inhomogeneity(IReadOnlyList<CalibrationRoll> rolls, double variation, double openArea)
     {
-        var logs = rolls.Where(r => r.PressureDrop is not null)
-            .Select(r => Math.Log(Medium(r, 1, variation, 0).Pascals / r.PressureDrop!.Value.Pascals)).ToArray();
+        var logs = rolls.Where(r => r.PressureDrop is not null).Select(r => Math.Log(MatchingFactor(r, variation, openArea))).ToArray();
         if (logs.Length == 0)
         {
             // Without a pressure drop the mats are taken to obey Davies' law.
@@ -107,15 +100,27 @@ internal sealed class CalibrationFit
         }
 
         var mean = logs.Average();
-        var spread = logs.Length > 1 ? Math.Sqrt(logs.Sum(l => (l - mean) * (l - mean)) / (logs.Length - 1)) : 0.1;
+        var spread = logs.Length > 1 ? Math.Sqrt(logs.Sum(l => (l - mean) * (l - mean)) / (logs.Length - 1)) : SpreadOfOneRoll;
         return (Math.Exp(mean), Math.Max(LeastRelative, spread * Math.Sqrt(1 + (1.0 / logs.Length))));
     }
 
-    private (double Value, double Relative) Charge(IReadOnlyList<CalibrationRoll> rolls, double factor, double variation)
+    /// <summary>ε that gives one roll its pressure drop. The mat's drag goes as 1/ε; holes beside it make that a short iteration.</summary>
+    private double MatchingFactor(CalibrationRoll roll, double variation, double openArea)
     {
-        bool Received(RigPenetration p) => !p.Discharged;
-        double Squared(double root) => Squares(rolls, factor, variation, root * root, Received);
-        var root = Minimum(Squared, 0, Math.Sqrt(LargestCharge));
+        var factor = 1.0;
+        for (var i = 0; i < (openArea > 0 ? 6 : 1); i++)
+        {
+            factor *= Medium(roll, new GradeFactors(factor, variation, openArea, 0)).Pascals / roll.PressureDrop!.Value.Pascals;
+        }
+
+        return factor;
+    }
+
+    private (double Value, double Relative) Charge(IReadOnlyList<CalibrationRoll> rolls, GradeFactors factors)
+    {
+        static bool Received(RigPenetration p) => !p.Discharged;
+        double[] At(double charge) => [.. rolls.SelectMany(r => Residuals(r, factors with { CoulombsPerSquareMetre = charge }, Received))];
+        var root = Minimum(x => At(x * x).Sum(e => e * e), 0, Math.Sqrt(LargestCharge));
         var charge = root * root;
         if (charge < 1e-9)
         {
@@ -123,26 +128,26 @@ internal sealed class CalibrationFit
         }
 
         // Linear propagation: the variance of the fit's residuals over the curvature of their sum of squares.
-        var residuals = rolls.SelectMany(r => Residuals(r, factor, variation, charge, Received)).ToArray();
+        var residuals = At(charge);
         var step = 0.02 * charge;
-        var slopes = rolls.SelectMany(r => Residuals(r, factor, variation, charge + step, Received)).Zip(residuals, (a, b) => (a - b) / step).ToArray();
+        var slopes = At(charge + step).Zip(residuals, (a, b) => (a - b) / step).ToArray();
         var noise = residuals.Sum(e => e * e) / Math.Max(1, residuals.Length - 1);
         var deviation = Math.Sqrt(noise / Math.Max(1e-300, slopes.Sum(s => s * s)));
         return (charge, Math.Max(LeastRelative, deviation / charge));
     }
 
-    private double Squares(IReadOnlyList<CalibrationRoll> rolls, double factor, double variation, double charge, Func<RigPenetration, bool> used) =>
-        rolls.SelectMany(r => Residuals(r, factor, variation, charge, used)).Sum(e => e * e);
+    private double Squares(IReadOnlyList<CalibrationRoll> rolls, GradeFactors factors, Func<RigPenetration, bool> used) =>
+        rolls.SelectMany(r => Residuals(r, factors, used)).Sum(e => e * e);
 
-    private double[] Residuals(CalibrationRoll roll, double factor, double variation, double charge, Func<RigPenetration, bool> used)
+    private double[] Residuals(CalibrationRoll roll, GradeFactors factors, Func<RigPenetration, bool> used)
     {
-        var bare = Medium(roll, factor, variation, 0);
-        var charged = charge > 0 ? Medium(roll, factor, variation, charge) : bare;
-        return [.. roll.Penetrations.Where(used).Select(p => Math.Exp(-(p.Discharged ? bare : charged).Attenuation(p.Particle.Meters)) - p.Penetration)];
+        var bare = Medium(roll, factors with { CoulombsPerSquareMetre = 0 });
+        var charged = factors.CoulombsPerSquareMetre > 0 ? Medium(roll, factors) : bare;
+        return [.. roll.Penetrations.Where(used).Select(p => Math.Exp(-(p.Discharged ? bare : charged).Attenuation(p.Particle.Meters)) - Math.Min(1, p.Penetration))];
     }
 
-    private MediumModel Medium(CalibrationRoll roll, double factor, double variation, double charge) =>
-        new([.. roll.Layers.Select(l => With(l, factor, variation, charge))], roll.Point, _model);
+    private MediumModel Medium(CalibrationRoll roll, GradeFactors factors) =>
+        new([.. roll.Layers.Select(factors.PutInto)], roll.Point, _model);
 
     /// <summary>A scan, so that a second minimum does not catch the search, then golden sections about the best.</summary>
     private static double Minimum(Func<double, double> value, double low, double high)
@@ -164,9 +169,9 @@ internal sealed class CalibrationFit
             yield return new Caveat("few-rolls", FormattableString.Invariant($"Calibrated on {_rolls.Count} roll(s): the spread from roll to roll is hardly known; use at least three."));
         }
 
-        if (fit.Inhomogeneity is < 0.8 or > 3)
+        if (fit.Factors.Inhomogeneity is < 0.8 or > 3)
         {
-            yield return new Caveat("unusual-inhomogeneity", FormattableString.Invariant($"The fitted inhomogeneity factor {fit.Inhomogeneity:G3} is unusual (0.8 to 3): check diameter, thickness and solidity."));
+            yield return new Caveat("unusual-inhomogeneity", FormattableString.Invariant($"The fitted inhomogeneity factor {fit.Factors.Inhomogeneity:G3} is unusual (0.8 to 3): check diameter, thickness and solidity."));
         }
 
         var penetrations = _rolls.SelectMany(r => r.Penetrations).ToArray();
@@ -176,5 +181,5 @@ internal sealed class CalibrationFit
         }
     }
 
-    private readonly record struct Fitted(double Inhomogeneity, double InhomogeneityRelative, double Variation, double Charge, double ChargeRelative);
+    private readonly record struct Fitted(GradeFactors Factors, double InhomogeneityRelative, double ChargeRelative);
 }

@@ -25,6 +25,12 @@ public sealed record GradeCalibration
     /// <summary>The coefficient of variation of basis weight that the penetrations ask for; dimensionless, 0 when none were measured.</summary>
     public required double BasisWeightVariation { get; init; }
 
+    /// <summary>
+    /// Share of the area in holes that pass all sizes, which the penetrations of large particles ask for; dimensionless. Taken as holes of
+    /// 0.2 mm, an assumption: only what they let through is fitted.
+    /// </summary>
+    public required double OpenArea { get; init; }
+
     /// <summary>The fibre charge; zero where no penetration as received was measured.</summary>
     public required ElectricSurfaceChargeDensity Charge { get; init; }
 
@@ -46,7 +52,7 @@ public sealed record GradeCalibration
     /// <param name="layers">The structure as measured.</param>
     /// <param name="discharged">Whether to leave the charge out.</param>
     public ImmutableArray<MediaLayer> Apply(IReadOnlyList<MediaLayer> layers, bool discharged = false) =>
-        [.. layers.Select(layer => CalibrationFit.With(layer, InhomogeneityFactor, BasisWeightVariation, discharged ? 0 : Charge.CoulombsPerSquareMeter) with
+        [.. layers.Select(layer => new GradeFactors(InhomogeneityFactor, BasisWeightVariation, OpenArea, discharged ? 0 : Charge.CoulombsPerSquareMeter).PutInto(layer) with
         {
             Uncertainty = (layer.Uncertainty ?? new LayerUncertainty()) with { Charge = discharged ? 0 : Math.Min(2, ChargeRelativeUncertainty), Inhomogeneity = Math.Min(1, InhomogeneityRelativeUncertainty) },
         })];
@@ -64,7 +70,7 @@ public sealed record GradeCalibration
     private Caveat Note()
     {
         var error = LeaveOneOutPenetrationError is { } e ? FormattableString.Invariant($"; left out one at a time they were forecast within {e:F3} of penetration (root mean square)") : "";
-        return new Caveat("calibrated", FormattableString.Invariant($"Calibrated for grade {Grade} on {Rolls.Length} roll(s), inhomogeneity factor {InhomogeneityFactor:G3}, basis-weight variation {BasisWeightVariation:P0}, charge {Charge.CoulombsPerSquareMeter * 1e6:G3} µC/m²{error}."));
+        return new Caveat("calibrated", FormattableString.Invariant($"Calibrated for grade {Grade} on {Rolls.Length} roll(s), inhomogeneity factor {InhomogeneityFactor:G3}, basis-weight variation {BasisWeightVariation:P0}, open area {OpenArea * 100:G2} %, charge {Charge.CoulombsPerSquareMeter * 1e6:G3} µC/m²{error}."));
     }
 
     /// <summary>Fits a grade's factors to its rolls.</summary>
