@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Imaging.Defects;
 using FiberScope.Imaging.Edges;
 using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Sections;
@@ -52,16 +53,21 @@ public static class FieldMeter
         [.. Enumerable.Range(0, ribbon.Strip.Rows).Select(r => new TracePoint(ribbon.Strip.X[r] + 0.5, ribbon.Strip.Y[r] + 0.5, ribbon.Width / 2))];
 
     private static FieldMeasurement Result(
-        Micrograph micrograph, MeasurementSettings settings, ImmutableArray<Trace> traces, ImmutableArray<PixelReading> readings, ImmutableSortedDictionary<string, int> rejected, double blur) => new()
+        Micrograph micrograph, MeasurementSettings settings, ImmutableArray<Trace> traces, ImmutableArray<PixelReading> found, ImmutableSortedDictionary<string, int> rejected, double blur)
+    {
+        var defects = DefectFinder.Find(micrograph, found, settings.Defects);
+        var readings = DefectMask.Off(micrograph, defects, found);
+        return new FieldMeasurement
         {
             Micrograph = micrograph,
-            Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = readings }, settings.Fitness),
+            Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = readings, Defects = defects }, settings.Fitness),
             Traces = traces,
             Readings = readings,
-            Rejected = rejected,
-            Defects = [],
+            Rejected = readings.Length < found.Length ? rejected.SetItem("on-defect", found.Length - readings.Length) : rejected,
+            Defects = defects,
             DetectionLimitPixels = Math.Max(2.5, 2 * blur),
             BlurPixels = blur,
             Algorithm = Algorithm,
         };
+    }
 }

@@ -1,3 +1,4 @@
+using FiberScope.Imaging.Defects;
 using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Sections;
 using FiberScope.Imaging.Tracing;
@@ -12,6 +13,9 @@ public sealed record MeasurementSettings
 
     /// <summary>When a field is unfit for measuring.</summary>
     public FitnessSettings Fitness { get; init; } = new();
+
+    /// <summary>How regions that are not single fibres are found.</summary>
+    public DefectSettings Defects { get; init; } = new();
 
     /// <summary>How cut fibres are read in a section.</summary>
     public SectionSettings Sections { get; init; } = new();
