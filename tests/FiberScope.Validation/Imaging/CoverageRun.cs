@@ -54,7 +54,7 @@ internal static class CoverageRun
             means.StandardDeviation / truth);
     }
 
-    private static SpecimenRecipe Small(SpecimenRecipe family) => family with { WidthPixels = 512, HeightPixels = 448 };
+    private static SpecimenRecipe Small(SpecimenRecipe family) => family with { WidthPixels = 448, HeightPixels = 384 };
 
     private static Length Metres(double metres) => Length.FromMeters(metres);
 }

@@ -74,7 +74,7 @@ internal static class ImagingCommand
 
     private static void Coverage(int swatches, bool reporting)
     {
-        var found = CoverageRun.Run(swatches, 3, reporting);
+        var found = CoverageRun.Run(swatches, 2, reporting);
         FigureStore.Save("coverage", found);
         Console.WriteLine(found);
     }

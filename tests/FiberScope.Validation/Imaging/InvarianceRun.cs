@@ -30,7 +30,7 @@ internal static class InvarianceRun
     ];
 
     public static IReadOnlyList<InvarianceFigures> Virtual(int fields) =>
-        Of("virtual", [.. new[] { "fine-melt-blown", "electrospun" }.SelectMany(name => Enumerable.Range(0, fields).Select(i => SpecimenPicture.Micrograph(SpecimenPicture.Of(SpecimenFamilies.Find(name)!, reporting: true, i))))]);
+        Of("virtual", [.. new[] { "fine-melt-blown", "electrospun" }.SelectMany(name => Enumerable.Range(0, fields).Select(i => SpecimenPicture.Micrograph(SpecimenPicture.Of(SpecimenFamilies.Find(name)! with { WidthPixels = 800, HeightPixels = 640 }, reporting: true, i))))]);
 
     /// <summary>The real micrographs, where they are at hand; nothing otherwise.</summary>
     public static IReadOnlyList<InvarianceFigures> Real(int most)
