@@ -48,6 +48,12 @@ internal sealed record FamilyFigures
 
     public required double OrderError { get; init; }
 
+    /// <summary>Relative error of the share of the field that fibre takes (section: area, light: cover); NaN where none was measured.</summary>
+    public double FibreShareError { get; init; } = double.NaN;
+
+    /// <summary>True share of the field that fibre takes.</summary>
+    public double TrueFibreShare { get; init; } = double.NaN;
+
     public required double SecondsPerField { get; init; }
 
     /// <summary>The 1st to 99th percentile of truth and readings; pixels.</summary>
@@ -80,10 +86,18 @@ internal sealed record FamilyFigures
             FieldMeanScatter = Math.Sqrt(check.Fields.Select(f => new FamilyCheck(check.Family, [f]).MeanError).Average(e => e * e)),
             DirectionError = direction,
             OrderError = order,
+            FibreShareError = FibreShareOf(check),
+            TrueFibreShare = check.Fields.Average(f => f.Specimen.Truth.Cover),
             SecondsPerField = check.Fields.Average(f => f.Time.TotalSeconds),
             TruePercentiles = Percentiles(check.Truth),
             ReadPercentiles = check.Read is null ? [] : Percentiles(check.Read),
         };
+    }
+
+    private static double FibreShareOf(FamilyCheck check)
+    {
+        var shares = check.Fields.Where(f => f.Measurement is { FibreShare: not null }).Select(f => (Read: f.Measurement!.FibreShare!.Value, True: f.Specimen.Truth.Cover)).ToArray();
+        return shares.Length == 0 ? double.NaN : (shares.Average(s => s.Read) / shares.Average(s => s.True)) - 1;
     }
 
     private static double[] Percentiles(WeightedSample sample) => [.. Enumerable.Range(1, 99).Select(p => sample.Quantile(p / 100.0))];

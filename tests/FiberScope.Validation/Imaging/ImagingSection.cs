@@ -20,6 +20,7 @@ internal static class ImagingSection
         Table(text, "### What the measurement reaches", product);
         text.AppendLine("![Distributions read and true](figures/imaging-distributions.png)\n");
         Orientation(text, product);
+        FibreShare(text, product);
         Defects(text);
         Table(text, "### The quick way on the same pictures", quick);
         Coverage(text);
@@ -88,6 +89,26 @@ internal static class ImagingSection
         {
             var direction = double.IsFinite(f.DirectionError) ? Mark(f.DirectionError.ToString("+0.0°;-0.0°", CultureInfo.InvariantCulture), Math.Abs(f.DirectionError) <= 2) : "";
             text.AppendLine(CultureInfo.InvariantCulture, $"| {f.Family} | {Mark(f.OrderError.ToString("+0.000;-0.000", CultureInfo.InvariantCulture), Math.Abs(f.OrderError) <= 0.03)} | {direction} |");
+        }
+
+        text.AppendLine();
+    }
+
+    private static void FibreShare(StringBuilder text, FamilyFigures[] rows)
+    {
+        var some = rows.Where(f => double.IsFinite(f.FibreShareError)).ToArray();
+        if (some.Length == 0)
+        {
+            return;
+        }
+
+        text.AppendLine("### Solidity by image\n");
+        text.AppendLine("The share of the field that fibre takes: in a section it is the solidity itself (Delesse's principle; bar 3 % or 0.005), in transmitted light the cover that the solidity is derived from (bar 10 %).\n");
+        text.AppendLine("| family | true share | error |\n| --- | --- | --- |");
+        foreach (var f in some)
+        {
+            var isMet = f.Family == "cross-sections" ? Math.Abs(f.FibreShareError) <= Math.Max(0.03, 0.005 / f.TrueFibreShare) : Math.Abs(f.FibreShareError) <= 0.1;
+            text.AppendLine(CultureInfo.InvariantCulture, $"| {f.Family} | {f.TrueFibreShare:0.0000} | {Mark(f.FibreShareError.ToString("+0.0 %;-0.0 %", CultureInfo.InvariantCulture), isMet)} |");
         }
 
         text.AppendLine();
