@@ -8,6 +8,10 @@ internal sealed class CylinderPicture
 {
     private const double Fine = 0.02;
     private const int Size = 90;
+
+    /// <summary>Nothing is read further along the fibre than this, to either side.</summary>
+    private const double Needed = 34;
+
     private readonly double[] _across;
     private readonly double _reach, _sin, _cos, _offset;
     private readonly float[] _pixels;
@@ -26,6 +30,12 @@ internal sealed class CylinderPicture
         {
             for (var x = 0; x < _wide; x++)
             {
+                var along = ((y - (0.5 * _wide)) * _cos) - ((x - (0.5 * _wide)) * _sin);
+                if (Math.Abs(along) > Needed)
+                {
+                    continue;
+                }
+
                 var expected = Pixel(x - (0.5 * _wide), y - (0.5 * _wide));
                 _pixels[(y * _wide) + x] = (float)Math.Pow(Math.Max(0, Counted(expected, random)), look.Gamma);
             }
