@@ -6,7 +6,7 @@ namespace FiberScope.Imaging.Selection;
 internal sealed record DetectionCurve(double HalfWay, double Steepness)
 {
     /// <summary>A correction beyond this factor rests on too few readings to be believed.</summary>
-    public const double LargestFactor = 4;
+    public const double LargestFactor = 1.3;
 
     /// <summary>Every width is read alike.</summary>
     public static DetectionCurve Even { get; } = new(1e-3, 4);

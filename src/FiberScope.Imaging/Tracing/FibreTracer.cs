@@ -178,6 +178,6 @@ internal sealed class FibreTracer
             chosen.Add(ribbon);
         }
 
-        return Streaks.Removed(chosen, _picture.Linear.Width, _picture.Linear.Height);
+        return SecondLook.At(Streaks.Removed(chosen, _picture.Linear.Width, _picture.Linear.Height));
     }
 }

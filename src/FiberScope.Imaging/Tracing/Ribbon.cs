@@ -1,8 +1,11 @@
 namespace FiberScope.Imaging.Tracing;
 
 /// <summary>A measured candidate: its strip, which rows were accepted, and how good it is.</summary>
-internal sealed class Ribbon(RibbonStrip strip, bool[] accepted, double[] widths, double evidence)
+internal sealed class Ribbon(RibbonStrip strip, bool[] accepted, double[] widths, double contrast, double evidence)
 {
+    /// <summary>The contrast of the weaker flank, median over the accepted rows.</summary>
+    public double Contrast { get; } = contrast;
+
     public RibbonStrip Strip { get; } = strip;
 
     /// <summary>For each row whether it gives a reading.</summary>

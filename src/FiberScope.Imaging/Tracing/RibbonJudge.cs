@@ -76,7 +76,7 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             return null;
         }
 
-        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast * Math.Sqrt(length) * Math.Pow(width, -WidthDoubt) * (1 - (0.5 * rival)));
+        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast, contrast * Math.Sqrt(length) * Math.Pow(width, -WidthDoubt) * (1 - (0.5 * rival)));
     }
 
     private string? Reason(RibbonStrip strip, StripLook looks, int r, double width)
