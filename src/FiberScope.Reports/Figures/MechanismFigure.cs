@@ -11,9 +11,17 @@ internal static class MechanismFigure
 {
     private const double LeastShare = 0.005;
 
+    /// <summary>Where less than this gets through, everything is stopped several times over and shares mean little.</summary>
+    private const double LeastPenetration = 1e-6;
+
     public static SvgFigure Draw(MediaForecast forecast)
     {
-        var curve = forecast.Curve;
+        CurvePoint[] curve = [.. forecast.Curve.Where(p => p.Penetration >= LeastPenetration)];
+        if (curve.Length < 2)
+        {
+            curve = [.. forecast.Curve];
+        }
+
         string[] mechanisms = [.. curve.SelectMany(p => p.ByMechanism.Where(m => m.Value >= LeastShare).Select(m => m.Key)).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
         var axis = PenetrationAxis.For(curve.Select(p => p.Penetration * 100).Append(100));
         var model = FigureStyle.Plot(PenetrationFigure.ParticleAxis(curve), axis.Drawn("penetration (%)"));
