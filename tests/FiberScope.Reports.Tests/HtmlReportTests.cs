@@ -3,6 +3,8 @@ using System.Text;
 using System.Text.RegularExpressions;
 using System.Xml.Linq;
 using FiberScope.Assessment;
+using FiberScope.Fibres;
+using FiberScope.Statistics;
 
 namespace FiberScope.Reports.Tests;
 
@@ -119,6 +121,34 @@ public sealed partial class HtmlReportTests
         var page = Written(bare);
         Assert.Contains("No grade was given", page, StringComparison.Ordinal);
         Assert.Contains("No forecast: it needs", page, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void One_reading_in_one_field_still_reports()
+    {
+        var full = Invented.Assessment(fields: 1);
+        var survey = DiameterSurvey.From([full.Layers[0].Survey.Readings[0]], new SurveySettings { BootstrapReplicates = 100 });
+        var page = Written(full with { Layers = [full.Layers[0] with { Survey = survey }] });
+        Assert.Contains("there is no shape to fit", page, StringComparison.Ordinal);
+        Assert.DoesNotContain("NaN", page, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_medium_that_lets_nothing_through_at_one_size_still_reports()
+    {
+        var full = Invented.Assessment();
+        var point = full.Forecast!.Curve[0] with { Penetration = 0, ModelBand = new Interval(0, 0), MeasurementBand = null };
+        var page = Written(full with { Forecast = full.Forecast with { Curve = [point], MostPenetratingSize = null, PenetrationAtMostPenetratingSize = 0 } });
+        Assert.Contains("none between 10 nm and 2 µm", page, StringComparison.Ordinal);
+        Assert.DoesNotContain("NaN", page, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_stopped_run_writes_no_further()
+    {
+        using var stop = new CancellationTokenSource();
+        stop.Cancel();
+        Assert.Throws<OperationCanceledException>(() => new HtmlReport().Write(Invented.Assessment(fields: 1), Stream.Null, stop.Token));
     }
 
     private static string Written(SwatchAssessment assessment)

@@ -1,7 +1,9 @@
 using FiberScope.Assessment;
+using FiberScope.Fibres;
 using FiberScope.Filtration;
 using FiberScope.Reports.Figures;
 using FiberScope.Reports.Html;
+using FiberScope.Statistics;
 
 namespace FiberScope.Reports.Sections;
 
@@ -26,13 +28,15 @@ internal sealed class ForecastSection : IReportSection
 
         return Markup.Of(
             $"""
-            <p>By the model, for a face velocity of {Wording.Of(forecast.OperatingPoint.FaceVelocity)} in air at {Air(forecast)}, particles of {Wording.Of(forecast.OperatingPoint.ParticleDensity)}. A forecast, not a test: only the standard's own test decides.</p>
+            <p>By {Model(forecast.Correlations)}, for a face velocity of {Wording.Of(forecast.OperatingPoint.FaceVelocity)} in air at {Air(forecast)}, particles of {Wording.Of(forecast.OperatingPoint.ParticleDensity)}. A forecast, not a test: only the standard's own test decides.</p>
             {Key(forecast)}
             <figure>{Markup.OfSvg(PenetrationFigure.Draw(forecast, assessment.RigPoints))}<figcaption>The two bands are kept apart: what the measured inputs leave open, and how far the published models differ. Neither contains the other.</figcaption></figure>
             <figure>{Markup.OfSvg(MechanismFigure.Draw(forecast))}<figcaption>What each mechanism alone would let through; together they multiply to the thick line.</figcaption></figure>
             {Velocity(assessment, forecast)}
+            {SensitivityPart.Render(forecast)}
             {Permeability(assessment)}
             {Rig(assessment)}
+            {LeakPart.Render(forecast)}
             {Curve(forecast)}
             """);
     }
@@ -44,6 +48,14 @@ internal sealed class ForecastSection : IReportSection
         return forecast.Curve.MinBy(p => Math.Abs(Math.Log(p.Particle.Meters / size)))!;
     }
 
+    private static string Model(CorrelationSet set) => set switch
+    {
+        CorrelationSet.KirschStechkina1978 => "the fan model (Kirsch and Stechkina 1978)",
+        CorrelationSet.LeeLiu1982 => "the formulas of Lee and Liu (1982)",
+        CorrelationSet.Hinds1999 => "the formulas of Hinds (1999)",
+        _ => "the numerical solution of the Kuwabara cell",
+    };
+
     private static string Air(MediaForecast forecast)
     {
         var air = forecast.OperatingPoint.Air;
@@ -53,14 +65,23 @@ internal sealed class ForecastSection : IReportSection
     private static Markup Key(MediaForecast forecast)
     {
         var worst = AtMpps(forecast);
+        var open = forecast.Uncertainty;
         return new Table("figures", "forecast", "value", "measured inputs, 95 %", "spread of the models")
-            .Row("pressure drop", Wording.Of(forecast.PressureDrop), "", forecast.PressureDropModelBandPascals is { } drops ? $"{Wording.Number(drops.Low)} to {Wording.Number(drops.High)} Pa" : "–")
-            .Row("most-penetrating particle size (MPPS)", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none between 10 nm and 2 µm", "", "")
-            .Row("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), worst.MeasurementBand is { } band ? Wording.Percent(band) : "–", Wording.Percent(worst.ModelBand))
+            .Row("pressure drop", Wording.Of(forecast.PressureDrop), Range(open?.PressureDropPascals, 1, "Pa"), Range(forecast.PressureDropModelBandPascals, 1, "Pa"))
+            .Row("most-penetrating particle size (MPPS)", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none between 10 nm and 2 µm", Sizes(open?.MostPenetratingSize), Sizes(forecast.MostPenetratingSizeModelBand))
+            .Row("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), Range(open?.PenetrationAtMostPenetratingSize ?? worst.MeasurementBand, 100, "%"), Range(forecast.PenetrationAtMostPenetratingSizeModelBand ?? worst.ModelBand, 100, "%"))
             .Row("efficiency at the MPPS", Wording.Percent(1 - forecast.PenetrationAtMostPenetratingSize, 4), "", "")
-            .Row("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} per kPa", "", "")
+            .Row("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} /kPa", Range(open?.QualityFactorPerPascal, 1000, "/kPa"), "")
             .Finish();
     }
+
+    private static string Range(Interval? interval, double factor, string unit) => interval is { } range
+        ? $"{Wording.Number(range.Low * factor)} to {Wording.Number(range.High * factor)} {unit}"
+        : "–";
+
+    private static string Sizes(LengthInterval? interval) => interval is { } range
+        ? $"{Wording.Number(range.Low.Micrometers, 2)} to {Wording.Number(range.High.Micrometers, 2)} µm"
+        : "–";
 
     private static Markup Velocity(SwatchAssessment assessment, MediaForecast forecast)
     {

@@ -80,7 +80,7 @@ internal sealed class SummarySection : IReportSection
 
         var at = $"forecast at {Wording.Of(forecast.OperatingPoint.FaceVelocity)}";
         var worst = ForecastSection.AtMpps(forecast);
-        var inputs = worst.MeasurementBand is { } band ? $"inputs, 95 %: {Wording.Percent(band, 2)}; " : "";
+        var inputs = (forecast.Uncertainty?.PenetrationAtMostPenetratingSize ?? worst.MeasurementBand) is { } band ? $"inputs, 95 %: {Wording.Percent(band, 2)}; " : "";
         var drop = forecast.PressureDropModelBandPascals is { } drops ? $"models: {Wording.Number(drops.Low)} to {Wording.Number(drops.High)} Pa" : "";
         return Markup.Of(
             $"""
@@ -131,7 +131,10 @@ internal sealed class SummarySection : IReportSection
     private static Markup Found(Verdict verdict, ObservedValue found)
     {
         var characteristic = verdict.Limit.Characteristic;
-        return Markup.Of($"{characteristic.Format(found.Value)} <span class=\"u\">(u {characteristic.FormatUncertainty(found.StandardUncertainty)})</span>");
+        var uncertainty = characteristic.In(found.StandardUncertainty) > 0
+            ? $"u {characteristic.FormatUncertainty(found.StandardUncertainty)}"
+            : characteristic.IsForecast ? "models only" : "taken as exact";
+        return Markup.Of($"{characteristic.Format(found.Value)} <span class=\"u\">({uncertainty})</span>");
     }
 
     private static string Risk(Verdict verdict) => verdict.Observed is null
