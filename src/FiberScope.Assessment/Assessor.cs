@@ -31,6 +31,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             Forecast = prediction?.Forecast,
             VelocitySweep = prediction?.Sweep() ?? [],
             AirPermeabilities = prediction?.Permeabilities() ?? [],
+            Classes = prediction?.Classes() ?? [],
             RigPoints = RigPoints(swatch, prediction),
             Verdict = swatch.Grade is null ? null : new GradeJudging(layers, layers[0], prediction?.Findings()).Judge(swatch.Grade),
             Recipe = RecipeKeeping.Of(swatch, settings, layers, clock.GetUtcNow()),
@@ -75,20 +76,14 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             return null;
         }
 
-        MediaLayer[] media = [.. layers.Select(l => new MediaLayer
-        {
-            Name = l.Name,
-            Diameters = l.Survey.Distribution,
-            Solidity = l.Solidity!.Combined.Value,
-            Thickness = l.Thickness!.Value,
-        })];
+        MediaLayer[] media = [.. layers.Select(LayerMedia.Of)];
         return new SwatchPrediction(media, operation, ForecastSettingsOf(swatch), cancellation);
     }
 
     private ForecastSettings ForecastSettingsOf(SwatchFile swatch)
     {
         var standard = new ForecastSettings();
-        return standard with { Correlations = settings.Correlations ?? swatch.Correlations ?? standard.Correlations };
+        return standard with { Correlations = settings.Correlations ?? swatch.Correlations ?? standard.Correlations, Seed = settings.Measuring.Seed };
     }
 
     private static ImmutableArray<RigPoint> RigPoints(SwatchFile swatch, SwatchPrediction? prediction) => prediction is null

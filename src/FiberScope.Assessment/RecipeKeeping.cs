@@ -40,6 +40,7 @@ internal static class RecipeKeeping
             yield return Entry(name, value, isDefault);
         }
 
+        yield return Entry("forecast, draws of the uncertain inputs", Number(new Filtration.ForecastSettings().Draws), isDefault: true);
         if (settings.Correlations is { } chosen)
         {
             yield return Entry("correlations", Words.Of(Words.Correlations, chosen), isDefault: false);

@@ -23,6 +23,9 @@ public sealed record SwatchAssessment
     /// <summary>Air permeability at 125 Pa and 200 Pa; empty without a forecast.</summary>
     public required ImmutableArray<AirPermeability> AirPermeabilities { get; init; }
 
+    /// <summary>The classes of published standards that the forecast points to; empty without a forecast.</summary>
+    public ImmutableArray<ClassForecast> Classes { get; init; } = [];
+
     /// <summary>What a rig measured on this material, beside the forecast for the same conditions.</summary>
     public required ImmutableArray<RigPoint> RigPoints { get; init; }
 

@@ -45,6 +45,7 @@ internal static class Invented
             Forecast = forecast,
             VelocitySweep = [.. Enumerable.Range(1, 20).Select(i => Sweep(i))],
             AirPermeabilities = [new(Pressure.FromPascals(125), Speed.FromMillimetersPerSecond(161)), new(Pressure.FromPascals(200), Speed.FromMillimetersPerSecond(258))],
+            Classes = [Class()],
             RigPoints = [new(Speed.FromCentimetersPerSecond(5.3), Pressure.FromPascals(44), Length.FromMicrometers(0.3), 0.031, Pressure.FromPascals(41), 0.027)],
             Verdict = Verdict(survey, forecast),
             Recipe = Recipe(findings),
@@ -160,8 +161,41 @@ internal static class Invented
             PenetrationAtMostPenetratingSize = worst.Penetration,
             QualityFactorPerPascal = -Math.Log(worst.Penetration) / 41.2,
             Caveats = [],
+            MostPenetratingSizeModelBand = new LengthInterval(Length.FromMicrometers(0.15), Length.FromMicrometers(0.22)),
+            PressureDropModelBandPascals = new Interval(36, 66),
+            Uncertainty = new MeasurementUncertainty
+            {
+                Draws = 2000,
+                Seed = 1,
+                PressureDropPascals = new Interval(36, 47),
+                MostPenetratingSize = new LengthInterval(Length.FromMicrometers(0.16), Length.FromMicrometers(0.19)),
+                PenetrationAtMostPenetratingSize = new Interval(0.04, 0.069),
+                QualityFactorPerPascal = new Interval(0.06, 0.08),
+                Ranking = [Cause("diameter-scale", 0.62, 0.5), Cause("thickness", 0.3, 0.4), Cause("solidity", 0.08, 0.1)],
+            },
         };
     }
+
+    private static InputContribution Cause(string input, double penetration, double drop) => new()
+    {
+        Input = input,
+        Layer = 1,
+        LogPenetrationDeviation = 0.1 * penetration,
+        PressureDropDeviation = 0.05 * drop,
+        PenetrationShare = penetration,
+        PressureDropShare = drop,
+    };
+
+    private static ClassForecast Class() => new()
+    {
+        Standard = "Invented standard",
+        Edition = "made up",
+        Provenance = "no source: a test",
+        Class = "I2",
+        Probability = 0.71,
+        All = [new ClassProbability("I1", 0.93, true), new ClassProbability("I2", 0.71, true), new ClassProbability("I3", 0.2, false)],
+        NotJudged = "anything else",
+    };
 
     private static VelocityPoint Sweep(int i) => new(
         Speed.FromCentimetersPerSecond(i),

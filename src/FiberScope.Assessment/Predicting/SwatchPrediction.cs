@@ -8,15 +8,24 @@ namespace FiberScope.Assessment.Predicting;
 /// <summary>The forecast of one swatch and everything that is asked of it besides.</summary>
 internal sealed class SwatchPrediction(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastSettings settings, CancellationToken cancellation)
 {
+    /// <summary>For figures that are shown without a band of the inputs: nothing is drawn.</summary>
+    private readonly ForecastSettings _central = settings with { Draws = 0 };
+
     public MediaForecast Forecast { get; } = Predictor.Forecast(layers, operation, settings, cancellation);
 
-    public ImmutableArray<VelocityPoint> Sweep() => Predictor.Sweep(layers, operation, settings, cancellation);
+    public ImmutableArray<VelocityPoint> Sweep() => Predictor.Sweep(layers, operation, _central, cancellation);
 
-    public ImmutableArray<AirPermeability> Permeabilities() => Predictor.Permeabilities(layers, operation, settings);
+    public ImmutableArray<AirPermeability> Permeabilities() => Predictor.Permeabilities(layers, operation, _central);
 
-    public ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests) => Predictor.Compare(tests, layers, operation, settings, cancellation);
+    public ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests) => Predictor.Compare(tests, layers, operation, _central, cancellation);
 
-    public ForecastFindings Findings() => new(Forecast, At, pressure => MediaModel.AirPermeability(layers, operation, pressure, settings));
+    public ImmutableArray<ClassForecast> Classes()
+    {
+        cancellation.ThrowIfCancellationRequested();
+        return MediaClasses.Judge(layers, operation, settings);
+    }
+
+    public ForecastFindings Findings() => new(Forecast, At, pressure => MediaModel.AirPermeability(layers, operation, pressure, _central));
 
     private CurvePoint At(Length particle) =>
         Predictor.Forecast(layers, operation with { Particles = [particle] }, settings, cancellation).Curve[0];

@@ -36,6 +36,7 @@ internal sealed class ForecastSection : IReportSection
             {SensitivityPart.Render(forecast)}
             {Permeability(assessment)}
             {Rig(assessment)}
+            {ClassPart.Render(assessment.Classes)}
             {LeakPart.Render(forecast)}
             {Curve(forecast)}
             """);
