@@ -54,6 +54,7 @@ internal sealed class ForecastSection : IReportSection
         CorrelationSet.KirschStechkina1978 => "the fan model (Kirsch and Stechkina 1978)",
         CorrelationSet.LeeLiu1982 => "the formulas of Lee and Liu (1982)",
         CorrelationSet.Hinds1999 => "the formulas of Hinds (1999)",
+        CorrelationSet.CellMat => "the numerical solution of the Kuwabara cell, made as uneven as real pads",
         _ => "the numerical solution of the Kuwabara cell",
     };
 
