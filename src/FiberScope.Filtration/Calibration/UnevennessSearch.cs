@@ -23,7 +23,9 @@ internal static class UnevennessSearch
         {
             step /= 2;
             (double X, double Y) centre = best.Point;
-            var around = from i in new[] { -step, 0, step } from j in new[] { -step, 0, step } where i != 0 || j != 0
+            var around = from i in new[] { -step, 0, step }
+                         from j in new[] { -step, 0, step }
+                         where i != 0 || j != 0
                          select (X: Math.Clamp(centre.X + i, 0, 1), Y: Math.Clamp(centre.Y + j, 0, 1));
             var nearest = around.Select(p => (Point: p, Misfit: At(p))).MinBy(p => p.Misfit);
             best = nearest.Misfit < best.Misfit ? nearest : best;
