@@ -17,12 +17,17 @@ internal static class Schema
     {
         var document = JsonNode.Parse(Encoding.UTF8.GetString(bytes))!;
         var name = document["schema"]!.GetValue<string>();
-        var schema = Published[name["fiberscope/".Length..].Replace('/', '-')];
-        using var element = System.Text.Json.JsonDocument.Parse(document.ToJsonString());
-        var result = schema.Evaluate(element.RootElement, Options);
-        var wrong = (result.Details ?? []).Where(d => d.Errors is { Count: > 0 }).Select(d => $"{d.InstanceLocation}: {string.Join("; ", d.Errors!.Values)}").Take(5);
-        Assert.True(result.IsValid, string.Join('\n', wrong));
+        Assert.True(Keeps(document, name["fiberscope/".Length..].Replace('/', '-'), out var wrong), wrong);
         return document;
+    }
+
+    /// <summary>Whether a document keeps a published schema, and if not, the first few places where it does not.</summary>
+    public static bool Keeps(JsonNode document, string name, out string wrong)
+    {
+        using var element = System.Text.Json.JsonDocument.Parse(document.ToJsonString());
+        var result = Published[name].Evaluate(element.RootElement, Options);
+        wrong = string.Join('\n', (result.Details ?? []).Where(d => d.Errors is { Count: > 0 }).Select(d => $"{d.InstanceLocation}: {string.Join("; ", d.Errors!.Values)}").Take(5));
+        return result.IsValid;
     }
 
     private static Dictionary<string, JsonSchema> Load()

@@ -9,6 +9,9 @@ public sealed class SmallFields : IAsyncLifetime
 
     public string Folder => _workspace.PathTo("fields");
 
+    /// <summary>The recipe that the pictures are made from.</summary>
+    public string Recipe => _workspace.PathTo("small.json");
+
     public string Field(int number) => _workspace.PathTo("fields", FormattableString.Invariant($"field-{number:00}.png"));
 
     public async ValueTask InitializeAsync()
