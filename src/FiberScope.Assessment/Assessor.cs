@@ -30,8 +30,11 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             Layers = [.. layers],
             Forecast = prediction?.Forecast,
             VelocitySweep = prediction?.Sweep() ?? [],
-            AirPermeabilities = prediction?.Permeabilities() ?? [],
-            Classes = prediction?.Classes() ?? [],
+            AirPermeabilities = prediction?.Prediction.Permeabilities ?? [],
+            Classes = prediction?.Prediction.Classes ?? [],
+            Challenges = prediction?.Prediction.Challenges ?? [],
+            Bands = prediction?.Prediction.Bands ?? [],
+            TotalInwardLeakage = prediction?.Prediction.TotalInwardLeakage,
             RigPoints = RigPoints(swatch, prediction),
             Verdict = swatch.Grade is null ? null : new GradeJudging(layers, layers[0], prediction?.Findings()).Judge(swatch.Grade),
             Recipe = RecipeKeeping.Of(swatch, settings, layers, clock.GetUtcNow()),
@@ -76,8 +79,8 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             return null;
         }
 
-        MediaLayer[] media = [.. layers.Select(LayerMedia.Of)];
-        return new SwatchPrediction(media, operation, ForecastSettingsOf(swatch), cancellation);
+        MediaLayer[] media = [.. layers.Zip(swatch.Layers, (found, told) => told.Traits.PutInto(LayerMedia.Of(found)))];
+        return new SwatchPrediction(media, operation, swatch.Request, ForecastSettingsOf(swatch), cancellation);
     }
 
     private ForecastSettings ForecastSettingsOf(SwatchFile swatch)

@@ -26,6 +26,15 @@ public sealed record SwatchAssessment
     /// <summary>The classes of published standards that the forecast points to; empty without a forecast.</summary>
     public ImmutableArray<ClassForecast> Classes { get; init; } = [];
 
+    /// <summary>What passes of the aerosols that the swatch file asks for; may be empty.</summary>
+    public ImmutableArray<ChallengeFinding> Challenges { get; init; } = [];
+
+    /// <summary>What passes in the bands of size that the swatch file asks for; may be empty.</summary>
+    public ImmutableArray<BandFinding> Bands { get; init; } = [];
+
+    /// <summary>Total inward leakage at the most-penetrating size; null unless the swatch file tells a mask's leaks or an edge leak.</summary>
+    public double? TotalInwardLeakage { get; init; }
+
     /// <summary>What a rig measured on this material, beside the forecast for the same conditions.</summary>
     public required ImmutableArray<RigPoint> RigPoints { get; init; }
 
@@ -37,6 +46,17 @@ public sealed record SwatchAssessment
 
     /// <summary>What a reader must know before relying on the numbers, from every part.</summary>
     public required ImmutableArray<Caveat> Caveats { get; init; }
+
+    /// <summary>The forecast and what was asked besides; null without a forecast.</summary>
+    public MediaPrediction? Prediction => Forecast is null ? null : new MediaPrediction
+    {
+        Forecast = Forecast,
+        Permeabilities = AirPermeabilities,
+        Classes = Classes,
+        Challenges = Challenges,
+        Bands = Bands,
+        TotalInwardLeakage = TotalInwardLeakage,
+    };
 
     /// <summary>Every field of every layer, in order.</summary>
     public IEnumerable<FieldFinding> Fields => Layers.SelectMany(layer => layer.Fields);

@@ -8,7 +8,7 @@ namespace FiberScope.Assessment.Input;
 internal static class LayerReader
 {
     /// <summary>The keys that belong to a layer and stand at the top only when there is a single one.</summary>
-    public static readonly ImmutableArray<string> Keys = ["images", "imaging", "basis_weight", "thickness", "polymer", "solidity"];
+    public static readonly ImmutableArray<string> Keys = ["images", "imaging", "basis_weight", "thickness", "polymer", "solidity", .. LayerTraitReader.Keys];
 
     /// <summary>Reads a layer; problems are reported to the file.</summary>
     /// <param name="map">The mapping that holds the layer's keys.</param>
@@ -16,6 +16,7 @@ internal static class LayerReader
     /// <param name="forForecast">Whether a forecast is wanted, which needs solidity and thickness.</param>
     public static SwatchLayer Read(MapReader map, string name, bool forForecast)
     {
+        var solidity = map.InsideStated("solidity", 0, 1);
         var layer = new SwatchLayer
         {
             Name = name,
@@ -24,7 +25,9 @@ internal static class LayerReader
             BasisWeight = map.Positive("basis_weight", Kinds.BasisWeight),
             Thickness = map.Positive("thickness", Kinds.Length),
             Material = Material(map),
-            Solidity = map.Inside("solidity", 0, 1),
+            Solidity = solidity?.Value,
+            SolidityUncertainty = solidity?.RelativeUncertainty,
+            Traits = LayerTraitReader.Read(map),
         };
         CheckWeighing(map);
         CheckSolidity(map, layer);

@@ -85,6 +85,14 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
     public double? Within(string key, double low, double high) =>
         Pure(key, value => value >= low && value <= high, FormattableString.Invariant($"must lie from {low} to {high}"));
 
+    /// <summary>A pure number strictly between two limits, with its uncertainty where given; null when absent or wrong.</summary>
+    public Stated<double>? InsideStated(string key, double low, double high) =>
+        PureStated(key, value => value > low && value < high, FormattableString.Invariant($"must lie between {low} and {high}, both excluded"));
+
+    /// <summary>A pure number between two limits or on one of them, with its uncertainty where given; null when absent or wrong.</summary>
+    public Stated<double>? WithinStated(string key, double low, double high) =>
+        PureStated(key, value => value >= low && value <= high, FormattableString.Invariant($"must lie from {low} to {high}"));
+
     /// <summary>One of several words; null when absent or wrong.</summary>
     public T? Choice<T>(string key, IReadOnlyDictionary<string, T> words)
         where T : struct
@@ -148,18 +156,38 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
             return null;
         }
 
-        if (QuantityText.ReadPure(text, out var value) is { } complaint)
+        if (QuantityText.ReadPure(text, out double value) is { } complaint)
         {
             Complain(key, complaint);
             return null;
         }
 
-        if (sound(value))
+        return Ruled(key, text, sound(value), rule) ? value : null;
+    }
+
+    private Stated<double>? PureStated(string key, Func<double, bool> sound, string rule)
+    {
+        if (Text(key) is not { } text)
         {
-            return value;
+            return null;
         }
 
-        Complain(key, $"'{text}' {rule}");
-        return null;
+        if (QuantityText.ReadPure(text, out Stated<double>? stated) is { } complaint)
+        {
+            Complain(key, complaint);
+            return null;
+        }
+
+        return Ruled(key, text, sound(stated!.Value), rule) ? stated : null;
+    }
+
+    private bool Ruled(string key, string text, bool sound, string rule)
+    {
+        if (!sound)
+        {
+            Complain(key, $"'{text}' {rule}");
+        }
+
+        return sound;
     }
 }

@@ -15,6 +15,9 @@ public sealed record MediaFile
     /// <summary>How the medium is used.</summary>
     public required OperatingPoint Operation { get; init; }
 
+    /// <summary>What is asked beside the curve.</summary>
+    public ForecastRequest Request { get; init; } = new();
+
     /// <summary>The correlations asked for; null for the default.</summary>
     public required CorrelationSet? Correlations { get; init; }
 

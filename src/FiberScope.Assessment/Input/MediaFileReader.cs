@@ -7,42 +7,49 @@ using YamlDotNet.RepresentationModel;
 namespace FiberScope.Assessment.Input;
 
 /// <summary>Turns the text of a media file into a <see cref="MediaFile"/>, gathering every problem on the way.</summary>
-internal sealed class MediaFileReader
+/// <param name="map">The mapping that holds the keys.</param>
+/// <param name="folder">The folder that relative paths start from.</param>
+internal sealed class MediaFileReader(MapReader map, string folder)
 {
-    private readonly InputText _file;
-    private readonly string _folder;
-
-    private MediaFileReader(InputText file, string folder)
+    public static MediaFile Read(InputText file, string folder)
     {
-        _file = file;
-        _folder = folder;
+        var map = new MapReader(file, file.Root);
+        var media = new MediaFileReader(map, folder).Read();
+        map.RejectUnknownKeys();
+        file.ThrowIfProblems();
+        return media!;
     }
 
-    public static MediaFile Read(InputText file, string folder) => new MediaFileReader(file, folder).Read();
-
-    private MediaFile Read()
+    /// <summary>The medium; null where something is wrong, and the file has been told what.</summary>
+    public MediaFile? Read()
     {
-        var map = new MapReader(_file, _file.Root);
         var operation = OperatingReader.Read(map);
+        var request = RequestReader.Read(map);
         var correlations = map.Choice("correlations", Words.Correlations);
         if (!map.Has("face_velocity") && !map.Has("flow"))
         {
-            _file.Report(1, "face_velocity is missing; add it, such as 'face_velocity: 5.3 cm/s'");
+            map.File.Report(map.Line, "face_velocity is missing; add it, such as 'face_velocity: 5.3 cm/s'");
         }
 
+        var layers = Layers();
+        return operation is null
+            ? null
+            : new MediaFile { Name = map.File.Name, Layers = layers, Operation = operation, Request = request, Correlations = correlations };
+    }
+
+    /// <summary>The layers that could be read.</summary>
+    public ImmutableArray<MediaLayer> Layers()
+    {
         var items = map.Items("layers");
         if (items.Count == 0)
         {
-            _file.Report(1, "layers is missing or empty; list at least one layer, upstream first");
+            map.File.Report(map.Line, "layers is missing or empty; list at least one layer, upstream first");
         }
 
-        MediaLayer[] layers = [.. items.Select((item, i) => Layer(map, item, i)).OfType<MediaLayer>()];
-        map.RejectUnknownKeys();
-        _file.ThrowIfProblems();
-        return new MediaFile { Name = _file.Name, Layers = [.. layers], Operation = operation!, Correlations = correlations };
+        return [.. items.Select(Layer).OfType<MediaLayer>()];
     }
 
-    private MediaLayer? Layer(MapReader map, YamlNode item, int index)
+    private MediaLayer? Layer(YamlNode item, int index)
     {
         if (map.AsMap(item, "layers") is not { } inner)
         {
@@ -50,28 +57,41 @@ internal sealed class MediaFileReader
         }
 
         var name = inner.Text("name") ?? FormattableString.Invariant($"layer {index + 1}");
-        var diameters = Diameters(inner);
+        var diameters = FibreDiameterReader.Read(inner, folder);
         var thickness = inner.Positive("thickness", Kinds.Length);
         if (!inner.Has("thickness"))
         {
-            _file.Report(inner.Line, $"{name}: thickness is missing; add it, such as 'thickness: 310 um'");
+            inner.File.Report(inner.Line, $"{name}: thickness is missing; add it, such as 'thickness: 310 um'");
         }
 
         var solidity = SolidityOf(inner, name, thickness?.Value);
+        var traits = LayerTraitReader.Read(inner);
         inner.RejectUnknownKeys();
-        return diameters is null || thickness is null || solidity is null
-            ? null
-            : new MediaLayer { Name = name, Diameters = diameters, Thickness = thickness.Value, Solidity = solidity };
+        if (diameters is null || thickness is null || solidity is null)
+        {
+            return null;
+        }
+
+        var known = new LayerUncertainty
+        {
+            DiameterScale = diameters.ScaleUncertainty,
+            IndependentFibres = diameters.IndependentFibres,
+            Solidity = solidity.RelativeUncertainty ?? 0,
+            Thickness = thickness.RelativeUncertainty ?? 0,
+            SolidityByWeighing = inner.Has("basis_weight"),
+        };
+        var isKnown = known with { SolidityByWeighing = false } != new LayerUncertainty();
+        return traits.PutInto(new MediaLayer { Name = name, Diameters = diameters.Distribution, Thickness = thickness.Value, Solidity = solidity.Value, Uncertainty = isKnown ? known : null });
     }
 
-    private Solidity? SolidityOf(MapReader map, string name, Length? thickness)
+    private static Stated<Solidity>? SolidityOf(MapReader map, string name, Length? thickness)
     {
-        var told = map.Inside("solidity", 0, 1);
+        var told = map.InsideStated("solidity", 0, 1);
         var weight = map.Positive("basis_weight", Kinds.BasisWeight);
         var material = LayerReader.Material(map);
         if (map.Has("solidity") == map.Has("basis_weight"))
         {
-            _file.Report(map.Line, $"{name}: give either solidity, or basis_weight with polymer");
+            map.File.Report(map.Line, $"{name}: give either solidity, or basis_weight with polymer");
         }
 
         if (map.Has("basis_weight") && !map.Has("polymer"))
@@ -81,7 +101,7 @@ internal sealed class MediaFileReader
 
         if (told is not null)
         {
-            return new Solidity(told.Value);
+            return new Stated<Solidity>(new Solidity(told.Value), told.RelativeUncertainty);
         }
 
         if (weight is null || material is null || thickness is null)
@@ -92,101 +112,15 @@ internal sealed class MediaFileReader
         var fraction = weight.Value.KilogramsPerSquareMeter / (material.Density.KilogramsPerCubicMeter * thickness.Value.Meters);
         if (fraction < 1)
         {
-            return new Solidity(fraction);
+            return new Stated<Solidity>(new Solidity(fraction), Weighing(weight, material));
         }
 
         map.Complain("basis_weight", FormattableString.Invariant($"with this thickness and polymer the solidity would be {fraction:G3}; it must be below 1, so one of the three is wrong"));
         return null;
     }
 
-    private DiameterDistribution? Diameters(MapReader map)
-    {
-        switch (map.Find("fibre_diameter"))
-        {
-            case null:
-                _file.Report(map.Line, "fibre_diameter is missing; add it, such as 'fibre_diameter: {median: 1.8 um, gsd: 1.6}'");
-                return null;
-            case YamlScalarNode:
-                return map.Positive("fibre_diameter", Kinds.Length) is { } one ? DiameterDistribution.OfOneDiameter(one.Value) : null;
-            default:
-                return map.Map("fibre_diameter") is { } inner ? Distribution(inner) : null;
-        }
-    }
-
-    private DiameterDistribution? Distribution(MapReader map)
-    {
-        var measurement = map.Text("measurement");
-        var layer = map.Text("layer");
-        var components = map.Items("components");
-        var single = map.Has("median") || map.Has("gsd");
-        if ((measurement is not null ? 1 : 0) + (components.Count > 0 ? 1 : 0) + (single ? 1 : 0) != 1)
-        {
-            _file.Report(map.Line, "fibre_diameter: give one of: a diameter; median with gsd; components; measurement");
-            return null;
-        }
-
-        var result = measurement is not null ? Measured(map, measurement, layer)
-            : single ? Component(map, fraction: 1) is { } one ? DiameterDistribution.Mixture([one]) : null
-            : Mixture(map, components);
-        map.RejectUnknownKeys();
-        return result;
-    }
-
-    private DiameterDistribution? Measured(MapReader map, string path, string? layer)
-    {
-        try
-        {
-            return DiameterDistribution.FromReadings(Json.MeasurementFile.Readings(Path.Combine(_folder, path), layer));
-        }
-        catch (InputException e)
-        {
-            map.Complain("measurement", e.Message);
-            return null;
-        }
-    }
-
-    private static DiameterDistribution? Mixture(MapReader map, IReadOnlyList<YamlNode> items)
-    {
-        var parts = ImmutableArray.CreateBuilder<LogNormalComponent>();
-        foreach (var item in items)
-        {
-            if (map.AsMap(item, "components") is not { } inner)
-            {
-                continue;
-            }
-
-            var fraction = inner.Within("fraction", 0, 1);
-            if (fraction is null or 0)
-            {
-                inner.File.Report(inner.Line, "components: each needs a 'fraction' of the fibre length above 0, such as 0.3");
-            }
-
-            if (Component(inner, fraction is > 0 ? fraction.Value : 1) is { } part)
-            {
-                parts.Add(part);
-            }
-
-            inner.RejectUnknownKeys();
-        }
-
-        var sum = parts.Sum(p => p.Fraction);
-        if (parts.Count == items.Count && Math.Abs(sum - 1) > 0.01)
-        {
-            map.Complain("components", FormattableString.Invariant($"the fractions sum to {sum:G4}; they must sum to 1"));
-        }
-
-        return parts.Count == items.Count ? DiameterDistribution.Mixture(parts) : null;
-    }
-
-    private static LogNormalComponent? Component(MapReader map, double fraction)
-    {
-        var median = map.Positive("median", Kinds.Length);
-        var gsd = map.Within("gsd", 1, 20);
-        if (!map.Has("median") || !map.Has("gsd"))
-        {
-            map.File.Report(map.Line, "median and gsd go together, such as {median: 1.8 um, gsd: 1.6}; the median is length-weighted");
-        }
-
-        return median is null || gsd is null ? null : new LogNormalComponent(fraction, median.Value, gsd.Value);
-    }
+    /// <summary>Of basis weight over density; the thickness has its own. A density counts only beside a weight whose uncertainty was told.</summary>
+    private static double? Weighing(Stated<AreaDensity> weight, FibreMaterial material) => weight.RelativeUncertainty is { } w
+        ? Math.Min(1, Math.Sqrt((w * w) + (material.RelativeUncertainty * material.RelativeUncertainty)))
+        : null;
 }

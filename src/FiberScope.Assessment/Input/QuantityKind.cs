@@ -25,11 +25,20 @@ internal sealed class QuantityKind<T>
 
     public string Example { get; }
 
+    /// <summary>Multiples of units that the units library does not know, by their normalised spelling.</summary>
+    public FrozenDictionary<string, (double Factor, Enum Unit)> Multiples { get; init; } = FrozenDictionary<string, (double, Enum)>.Empty;
+
     private Type UnitType { get; }
 
     /// <summary>The quantity of a number and a unit; false when the unit is not one of this kind.</summary>
     public bool TryMake(double number, string unit, out T quantity)
     {
+        if (Multiples.TryGetValue(UnitSpelling.Normalise(unit), out var multiple))
+        {
+            quantity = (T)Quantity.From(number * multiple.Factor, multiple.Unit);
+            return true;
+        }
+
         if (!TryUnit(unit, out var found))
         {
             quantity = default;
@@ -72,6 +81,24 @@ internal static class Kinds
         "a temperature", "23 C", typeof(TemperatureUnit),
         ("C", TemperatureUnit.DegreeCelsius), ("degC", TemperatureUnit.DegreeCelsius),
         ("F", TemperatureUnit.DegreeFahrenheit), ("degF", TemperatureUnit.DegreeFahrenheit));
+
+    public static readonly QuantityKind<TemperatureDelta> TemperatureDifference = new(
+        "a temperature difference", "1 K", typeof(TemperatureDeltaUnit),
+        ("C", TemperatureDeltaUnit.DegreeCelsius), ("°C", TemperatureDeltaUnit.DegreeCelsius), ("degC", TemperatureDeltaUnit.DegreeCelsius), ("K", TemperatureDeltaUnit.Kelvin),
+        ("F", TemperatureDeltaUnit.DegreeFahrenheit), ("°F", TemperatureDeltaUnit.DegreeFahrenheit), ("degF", TemperatureDeltaUnit.DegreeFahrenheit));
+
+    /// <summary>The units library knows no multiples of C/m² that people use; 1 nC/cm² is 10 µC/m².</summary>
+    public static readonly QuantityKind<ElectricSurfaceChargeDensity> SurfaceCharge = new(
+        "a charge per fibre surface", "40 uC/m2", typeof(ElectricSurfaceChargeDensityUnit))
+    {
+        Multiples = new Dictionary<string, (double, Enum)>(StringComparer.Ordinal)
+        {
+            ["µC/m²"] = (1e-6, ElectricSurfaceChargeDensityUnit.CoulombPerSquareMeter),
+            ["nC/m²"] = (1e-9, ElectricSurfaceChargeDensityUnit.CoulombPerSquareMeter),
+            ["mC/m²"] = (1e-3, ElectricSurfaceChargeDensityUnit.CoulombPerSquareMeter),
+            ["nC/cm²"] = (1e-5, ElectricSurfaceChargeDensityUnit.CoulombPerSquareMeter),
+        }.ToFrozenDictionary(StringComparer.Ordinal),
+    };
 
     public static readonly QuantityKind<VolumeFlow> Flow = new(
         "a flow", "95 l/min", typeof(VolumeFlowUnit),

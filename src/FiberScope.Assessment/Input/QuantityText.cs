@@ -36,8 +36,13 @@ internal static partial class QuantityText
     /// <summary>Reads a pure number: <c>0.08</c> or <c>8 %</c>.</summary>
     public static string? ReadPure(string text, out double value)
     {
-        var match = NumberAndUnit().Match(text.Trim());
         value = 0;
+        if (PlusMinus().IsMatch(text))
+        {
+            return $"'{text.Trim()}' has an uncertainty, and none is taken here; give the number alone";
+        }
+
+        var match = NumberAndUnit().Match(text.Trim());
         if (!match.Success || !double.TryParse(match.Groups["number"].Value, Number, CultureInfo.InvariantCulture, out value))
         {
             return NotANumber(text, "0.08 or 8 %");
@@ -56,11 +61,72 @@ internal static partial class QuantityText
         }
     }
 
+    /// <summary>Reads a pure number that may have an uncertainty: <c>0.08 ± 0.004</c> or <c>0.08 ± 5 %</c>, per cent of the value.</summary>
+    /// <returns>Null when it was read; else what is wrong.</returns>
+    public static string? ReadPure(string text, out Stated<double>? stated)
+    {
+        stated = null;
+        var parts = PlusMinus().Split(text.Trim());
+        if (parts.Length > 2)
+        {
+            return $"'{text}' has more than one uncertainty";
+        }
+
+        if (ReadPure(parts[0], out double value) is { } complaint)
+        {
+            return complaint;
+        }
+
+        if (parts.Length == 1)
+        {
+            stated = new Stated<double>(value);
+            return null;
+        }
+
+        if (ReadPure(parts[1], out double uncertainty) is { } wrong)
+        {
+            return wrong;
+        }
+
+        var percent = IsPercent(parts[1]);
+        if (percent && IsPercent(parts[0]))
+        {
+            return $"'{text}' can be read in two ways; write the value without %, such as 0.08 ± 0.004, or 0.08 ± 5 % for 5 % of the value";
+        }
+
+        var relative = percent ? uncertainty : uncertainty / Math.Abs(value);
+        stated = new Stated<double>(value, relative);
+        return Sound(relative, parts[1]);
+    }
+
+    /// <summary>Reads a temperature, whose uncertainty is a difference: <c>23 C ± 1 K</c>.</summary>
+    /// <returns>Null when it was read; else what is wrong.</returns>
+    public static string? ReadTemperature(string text, out Temperature temperature, out TemperatureDelta uncertainty)
+    {
+        uncertainty = TemperatureDelta.Zero;
+        var parts = PlusMinus().Split(text.Trim());
+        var complaint = ReadPlain(parts[0], Kinds.Temperature, out temperature);
+        if (complaint is not null || parts.Length == 1)
+        {
+            return complaint;
+        }
+
+        if (parts.Length > 2 || IsPercent(parts[1]))
+        {
+            return $"'{text}': the uncertainty of a temperature is one difference, such as 23 C ± 1 K";
+        }
+
+        return ReadPlain(parts[1], Kinds.TemperatureDifference, out uncertainty)
+            ?? (uncertainty.Kelvins is >= 0 and <= 50 ? null : $"the uncertainty '{parts[1].Trim()}' must lie from 0 K to 50 K");
+    }
+
+    private static bool IsPercent(string text) => text.TrimEnd() is var t && (t.EndsWith('%') || t.EndsWith("percent", StringComparison.Ordinal));
+
     private static string? ReadUncertainty<T>(string text, T value, QuantityKind<T> kind, out double relative)
         where T : struct, IQuantity
     {
         relative = 0;
-        if (text.TrimEnd().EndsWith('%'))
+        if (IsPercent(text))
         {
             return ReadPure(text, out relative) ?? Sound(relative, text);
         }

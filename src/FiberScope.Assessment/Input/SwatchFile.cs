@@ -22,6 +22,9 @@ public sealed record SwatchFile
     /// <summary>How the medium is used; null when no face velocity was told and no forecast is wanted.</summary>
     public required OperatingPoint? Operation { get; init; }
 
+    /// <summary>What is asked of the forecast beside its curve.</summary>
+    public ForecastRequest Request { get; init; } = new();
+
     /// <summary>The correlations asked for; null for the default.</summary>
     public required CorrelationSet? Correlations { get; init; }
 

@@ -13,6 +13,15 @@ internal static class SwatchFileReader
         var map = new MapReader(file, file.Root);
         var identity = Identity(map, file.Name);
         var operation = OperatingReader.Read(map);
+        var request = RequestReader.Read(map);
+        if (!map.Has("face_velocity") && !map.Has("flow"))
+        {
+            foreach (var key in RequestReader.Keys.Where(map.Has))
+            {
+                map.Complain(key, "asks for a forecast, which needs 'face_velocity'; add it or delete this line");
+            }
+        }
+
         var correlations = map.Choice("correlations", Words.Correlations);
         var layers = Layers(map, map.Has("face_velocity") || map.Has("flow"));
         var tests = RigTests(map, operation);
@@ -28,6 +37,7 @@ internal static class SwatchFileReader
             Identity = identity,
             Layers = layers,
             Operation = operation,
+            Request = request,
             Correlations = correlations,
             RigTests = tests,
             Grade = grade,

@@ -27,4 +27,10 @@ public sealed record SwatchLayer
 
     /// <summary>Solidity as told, in (0, 1); null when not told.</summary>
     public double? Solidity { get; init; }
+
+    /// <summary>Relative standard uncertainty of <see cref="Solidity"/>; null when not told.</summary>
+    public double? SolidityUncertainty { get; init; }
+
+    /// <summary>What else is told of it.</summary>
+    public LayerTraits Traits { get; init; } = new();
 }

@@ -16,6 +16,6 @@ internal static partial class UnitSpelling
     [GeneratedRegex(@"(?<=^|[/ ])(?<length>[kcmdnuµ]?m|in|ft)\^?(?<power>[23])(?![\w])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex SquareOrCube();
 
-    [GeneratedRegex(@"(?<![\p{L}])u(?<base>m|g|l|s)(?![\p{L}])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
+    [GeneratedRegex(@"(?<![\p{L}])u(?<base>m|g|l|s|C)(?![\p{L}])", RegexOptions.CultureInvariant, matchTimeoutMilliseconds: 60_000)]
     private static partial Regex MicroByLetter();
 }

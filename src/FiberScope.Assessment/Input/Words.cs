@@ -24,6 +24,38 @@ public static class Words
         ["cell-mat"] = CorrelationSet.CellMat,
     };
 
+    /// <summary>Which way the air flows, by the word that files use.</summary>
+    public static IReadOnlyDictionary<string, FlowDirection> FlowDirections { get; } = new Dictionary<string, FlowDirection>(StringComparer.Ordinal)
+    {
+        ["horizontal"] = FlowDirection.Horizontal,
+        ["down"] = FlowDirection.Down,
+        ["up"] = FlowDirection.Up,
+    };
+
+    /// <summary>How particles are charged, by the word that files use.</summary>
+    public static IReadOnlyDictionary<string, ParticleCharging> ParticleCharges { get; } = new Dictionary<string, ParticleCharging>(StringComparer.Ordinal)
+    {
+        ["equilibrium"] = ParticleCharging.Equilibrium,
+        ["none"] = ParticleCharging.Neutral,
+    };
+
+    /// <summary>What an instrument sums up, by the word that files use.</summary>
+    public static IReadOnlyDictionary<string, AerosolBasis> AerosolBases { get; } = new Dictionary<string, AerosolBasis>(StringComparer.Ordinal)
+    {
+        ["count"] = AerosolBasis.Count,
+        ["mass"] = AerosolBasis.Mass,
+        ["scattered-light"] = AerosolBasis.ScatteredLight,
+    };
+
+    /// <summary>Yes and no, as YAML files spell them.</summary>
+    public static IReadOnlyDictionary<string, bool> YesOrNo { get; } = new Dictionary<string, bool>(StringComparer.Ordinal)
+    {
+        ["yes"] = true,
+        ["no"] = false,
+        ["true"] = true,
+        ["false"] = false,
+    };
+
     /// <summary>The word for a choice.</summary>
     /// <exception cref="KeyNotFoundException">The choice has no word.</exception>
     public static string Of<T>(IReadOnlyDictionary<string, T> words, T choice)

@@ -23,9 +23,9 @@ internal sealed record AssessmentEntry(
         Schemas.Assessment,
         a.Identity,
         [.. a.Layers.Select(LayerEntry.Of)],
-        a.Forecast is null ? null : PredictionEntry.Of(a.Forecast),
+        a.Prediction is null ? null : PredictionEntry.Of(a.Prediction),
         [.. a.VelocitySweep.Select(v => new VelocityEntry(v.FaceVelocity.MetersPerSecond, v.PressureDrop.Pascals, v.MostPenetratingSize?.Micrometers, v.Penetration, v.QualityFactorPerPascal))],
-        [.. a.AirPermeabilities.Select(p => new PermeabilityEntry(p.PressureDrop.Pascals, p.FaceVelocity.MillimetersPerSecond))],
+        [.. a.AirPermeabilities.Select(PermeabilityEntry.Of)],
         [.. a.RigPoints.Select(p => new RigEntry(p.FaceVelocity.MetersPerSecond, p.PressureDrop?.Pascals, p.ForecastPressureDrop?.Pascals, p.Particle?.Micrometers, p.Penetration, p.ForecastPenetration))],
         a.Verdict is null ? null : VerdictEntry.Of(a.Verdict),
         RecipeJson.Of(a.Recipe),
@@ -55,7 +55,10 @@ internal sealed record LayerEntry(
 internal sealed record VelocityEntry(double FaceVelocityMPerS, double PressureDropPa, double? MppsUm, double PenetrationAtMpps, double QualityFactorPerPa);
 
 /// <summary>Air permeability at a pressure drop.</summary>
-internal sealed record PermeabilityEntry(double PressureDropPa, double FaceVelocityMmPerS);
+internal sealed record PermeabilityEntry(double PressureDropPa, double FaceVelocityMmPerS)
+{
+    public static PermeabilityEntry Of(AirPermeability p) => new(p.PressureDrop.Pascals, p.FaceVelocity.MillimetersPerSecond);
+}
 
 /// <summary>A rig result beside its forecast.</summary>
 internal sealed record RigEntry(double FaceVelocityMPerS, double? PressureDropPa, double? ForecastPressureDropPa, double? ParticleUm, double? Penetration, double? ForecastPenetration);

@@ -1,6 +1,5 @@
 using System.Collections.Immutable;
 using FiberScope.Fibres;
-using FiberScope.Filtration;
 
 namespace FiberScope.Assessment.Json;
 
@@ -17,9 +16,9 @@ public static class JsonDocuments
         JsonText.Write(destination, MeasurementEntry.Of(fields, survey, solidity, caveats));
 
     /// <summary>Writes a prediction file.</summary>
-    /// <param name="forecast">The forecast.</param>
+    /// <param name="prediction">The forecast and what was asked besides.</param>
     /// <param name="destination">Where to; left open.</param>
-    public static void Prediction(MediaForecast forecast, Stream destination) => JsonText.Write(destination, PredictionEntry.Of(forecast));
+    public static void Prediction(MediaPrediction prediction, Stream destination) => JsonText.Write(destination, PredictionEntry.Of(prediction));
 
     /// <summary>Writes an assessment file.</summary>
     /// <param name="assessment">The assessment.</param>

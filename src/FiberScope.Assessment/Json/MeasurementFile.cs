@@ -12,14 +12,37 @@ public static class MeasurementFile
     /// <param name="path">The JSON file.</param>
     /// <param name="layer">The layer's name in an assessment file; null for its only layer.</param>
     /// <exception cref="InputException">The file is missing, is no such file, or has no readings.</exception>
-    public static IReadOnlyList<DiameterReading> Readings(string path, string? layer)
+    public static IReadOnlyList<DiameterReading> Readings(string path, string? layer) => Read(path, layer, measurement => Readings(measurement, path));
+
+    /// <summary>The diameters behind the readings, with the uncertainties that the file tells.</summary>
+    /// <inheritdoc cref="Readings(string, string?)" path="/param|/exception"/>
+    internal static FibreDiameters Diameters(string path, string? layer) => Read(path, layer, measurement =>
+    {
+        var readings = Readings(measurement, path);
+        var pooled = measurement.GetProperty("pooled");
+        var mean = pooled.GetProperty("length_weighted").GetProperty("mean_um").GetDouble();
+
+        // All of the budget moves the diameters together but the fibres' own spread, which the draws of a forecast make anew.
+        var squares = pooled.GetProperty("budget").EnumerateArray().Where(p => p.GetProperty("name").GetString() != "fibres")
+            .Sum(p => Math.Pow(p.GetProperty("u_um").GetDouble() / mean, 2));
+        var lengths = readings.GroupBy(r => (r.Field, r.Fibre)).Select(g => g.Sum(r => r.RepresentedLength.Meters)).ToArray();
+        var effective = Math.Pow(lengths.Sum(), 2) / lengths.Sum(l => l * l);
+        return new FibreDiameters(DiameterDistribution.FromReadings(readings), Math.Min(1, Math.Sqrt(squares)), effective);
+    });
+
+    private static DiameterReading[] Readings(JsonElement measurement, string path)
+    {
+        var readings = Of(measurement).ToArray();
+        return readings.Length > 0 ? readings : throw new InputException($"{path}: holds no readings");
+    }
+
+    private static T Read<T>(string path, string? layer, Func<JsonElement, T> use)
     {
         try
         {
             using var stream = File.OpenRead(path);
             using var document = JsonDocument.Parse(stream);
-            var readings = Of(Measurement(document.RootElement, path, layer)).ToArray();
-            return readings.Length > 0 ? readings : throw new InputException($"{path}: holds no readings");
+            return use(Measurement(document.RootElement, path, layer));
         }
         catch (Exception e) when (e is IOException or UnauthorizedAccessException)
         {

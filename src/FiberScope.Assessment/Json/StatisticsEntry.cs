@@ -47,5 +47,7 @@ internal sealed record StatisticsEntry(
 
     public static double[] Ends(LengthInterval interval) => [interval.Low.Micrometers, interval.High.Micrometers];
 
+    public static double[]? EndsOf(Interval? interval) => interval is { } known ? Ends(known) : null;
+
     public static double[] Ends(Interval interval) => [interval.Low, interval.High];
 }

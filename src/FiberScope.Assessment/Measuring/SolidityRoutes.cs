@@ -35,7 +35,10 @@ public static class SolidityRoutes
 
         if (layer.Solidity is { } told)
         {
-            routes.Add(new SolidityEstimate(SolidityRoute.Stated, new Solidity(told), Require.Positive(told) * StatedUncertainty, FormattableString.Invariant($"As told, with a relative uncertainty of {StatedUncertainty:P0} assumed.")));
+            var note = layer.SolidityUncertainty is { } known
+                ? FormattableString.Invariant($"As told, with its relative uncertainty of {known:P1}.")
+                : FormattableString.Invariant($"As told, with a relative uncertainty of {StatedUncertainty:P0} assumed.");
+            routes.Add(new SolidityEstimate(SolidityRoute.Stated, new Solidity(told), Require.Positive(told) * (layer.SolidityUncertainty ?? StatedUncertainty), note));
         }
 
         return routes.ToImmutable();

@@ -22,6 +22,28 @@ public static class Predictor
         return MediaModel.Forecast(layers, operation, settings);
     }
 
+    /// <summary>The forecast at the operating point with everything that is asked besides.</summary>
+    /// <param name="layers">The layers, upstream first.</param>
+    /// <param name="operation">How the medium is used.</param>
+    /// <param name="request">What is asked.</param>
+    /// <param name="settings">Correlations, uncertainties and draws.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    public static MediaPrediction Predict(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastRequest request, ForecastSettings settings, CancellationToken cancellation)
+    {
+        var forecast = Forecast(layers, operation, settings, cancellation);
+        var findings = new RequestedFindings(layers, operation, request, settings);
+        cancellation.ThrowIfCancellationRequested();
+        return new MediaPrediction
+        {
+            Forecast = forecast,
+            Permeabilities = Permeabilities(layers, operation, settings),
+            Classes = findings.Classes(),
+            Challenges = findings.Challenges(),
+            Bands = findings.Bands(),
+            TotalInwardLeakage = findings.TotalInward(forecast.PenetrationAtMostPenetratingSize),
+        };
+    }
+
     /// <summary>The forecast over face velocity, from a fifth to five times the operating point's.</summary>
     public static ImmutableArray<VelocityPoint> Sweep(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastSettings settings, CancellationToken cancellation) =>
     [

@@ -6,24 +6,18 @@ using UnitsNet;
 namespace FiberScope.Assessment.Predicting;
 
 /// <summary>The forecast of one swatch and everything that is asked of it besides.</summary>
-internal sealed class SwatchPrediction(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastSettings settings, CancellationToken cancellation)
+internal sealed class SwatchPrediction(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastRequest request, ForecastSettings settings, CancellationToken cancellation)
 {
     /// <summary>For figures that are shown without a band of the inputs: nothing is drawn.</summary>
     private readonly ForecastSettings _central = settings with { Draws = 0 };
 
-    public MediaForecast Forecast { get; } = Predictor.Forecast(layers, operation, settings, cancellation);
+    public MediaPrediction Prediction { get; } = Predictor.Predict(layers, operation, request, settings, cancellation);
+
+    public MediaForecast Forecast => Prediction.Forecast;
 
     public ImmutableArray<VelocityPoint> Sweep() => Predictor.Sweep(layers, operation, _central, cancellation);
 
-    public ImmutableArray<AirPermeability> Permeabilities() => Predictor.Permeabilities(layers, operation, _central);
-
     public ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests) => Predictor.Compare(tests, layers, operation, _central, cancellation);
-
-    public ImmutableArray<ClassForecast> Classes()
-    {
-        cancellation.ThrowIfCancellationRequested();
-        return MediaClasses.Judge(layers, operation, settings);
-    }
 
     public ForecastFindings Findings() => new(Forecast, At, pressure => MediaModel.AirPermeability(layers, operation, pressure, _central));
 

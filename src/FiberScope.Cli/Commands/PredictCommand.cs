@@ -16,19 +16,21 @@ internal static class PredictCommand
         var media = new Argument<string>("media") { Description = "The media file (YAML); - reads it from standard input." };
         var json = new Option<string>("--json") { Description = "Where to write the prediction; - writes to standard output.", Required = true };
         var correlations = CommonOptions.Correlations();
-        var command = new Command("predict", "Forecast penetration and pressure drop of a medium from its structure.") { media, json, correlations };
+        var seed = CommonOptions.Seed();
+        var command = new Command("predict", "Forecast penetration and pressure drop of a medium from its structure.") { media, json, correlations, seed };
         command.SetAction((parsed, cancellation) => FiberScopeProgram.GuardAsync(
             console,
             token =>
             {
-                Run(console, parsed.GetRequiredValue(media), parsed.GetRequiredValue(json), CommonOptions.Chosen(parsed, correlations), token);
+                var standard = new ForecastSettings { Seed = parsed.GetValue(seed) };
+                Run(console, parsed.GetRequiredValue(media), parsed.GetRequiredValue(json), CommonOptions.Chosen(parsed, correlations), standard, token);
                 return ExitCode.Done;
             },
             cancellation));
         return command;
     }
 
-    private static void Run(CommandConsole console, string source, string json, CorrelationSet? correlations, CancellationToken cancellation)
+    private static void Run(CommandConsole console, string source, string json, CorrelationSet? correlations, ForecastSettings standard, CancellationToken cancellation)
     {
         var media = source == "-"
             ? MediaFile.Parse(console.ReadInput(), "standard input", Directory.GetCurrentDirectory())
@@ -38,20 +40,19 @@ internal static class PredictCommand
             OutputBatch.ProbeFile(json);
         }
 
-        var standard = new ForecastSettings();
-        var forecast = Predictor.Forecast(media.Layers, media.Operation, standard with { Correlations = correlations ?? media.Correlations ?? standard.Correlations }, cancellation);
+        var prediction = Predictor.Predict(media.Layers, media.Operation, media.Request, standard with { Correlations = correlations ?? media.Correlations ?? standard.Correlations }, cancellation);
         if (json == "-")
         {
-            JsonDocuments.Prediction(forecast, console.Output);
+            JsonDocuments.Prediction(prediction, console.Output);
             console.Output.Flush();
             return;
         }
 
         using var batch = new OutputBatch();
-        batch.Add(json, stream => JsonDocuments.Prediction(forecast, stream));
+        batch.Add(json, stream => JsonDocuments.Prediction(prediction, stream));
         batch.Publish();
-        console.Out.WriteLine(ForecastText.OneLine(forecast));
-        foreach (var caveat in forecast.Caveats)
+        PredictionSummary.Print(console.Out, prediction);
+        foreach (var caveat in prediction.Forecast.Caveats)
         {
             console.Error.WriteLine(caveat.Message);
         }

@@ -23,6 +23,10 @@ internal static class AssessmentSummary
         if (assessment.Forecast is { } forecast)
         {
             console.Write(Forecast(forecast, assessment));
+            foreach (var line in PredictionSummary.Asked(assessment.Prediction!))
+            {
+                console.WriteLine("  " + line);
+            }
         }
 
         if (assessment.Verdict is { } verdict)

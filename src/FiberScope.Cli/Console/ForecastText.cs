@@ -18,4 +18,12 @@ internal static class ForecastText
     public static string Percent(double share) => share is > 0 and < 1e-4
         ? FormattableString.Invariant($"{share * 100:0.0E0} %")
         : FormattableString.Invariant($"{share * 100:G3} %");
+
+    /// <summary>A probability in per cent; never written as certain.</summary>
+    public static string Chance(double probability) => probability switch
+    {
+        < 0.01 => "below 1 %",
+        > 0.99 => "above 99 %",
+        _ => FormattableString.Invariant($"{probability * 100:F0} %"),
+    };
 }

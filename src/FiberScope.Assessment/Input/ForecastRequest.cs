@@ -1,0 +1,41 @@
+using System.Collections.Immutable;
+using FiberScope.Filtration;
+using UnitsNet;
+
+namespace FiberScope.Assessment.Input;
+
+/// <summary>What is asked of a forecast beside the curve at the operating point.</summary>
+public sealed record ForecastRequest
+{
+    /// <summary>The area of medium in the finished product; null when not told.</summary>
+    public Area? MediaArea { get; init; }
+
+    /// <summary>Aerosols to send against the medium; may be empty.</summary>
+    public ImmutableArray<NamedAerosol> Challenges { get; init; } = [];
+
+    /// <summary>Bands of particle size to average over; may be empty.</summary>
+    public ImmutableArray<SizeBand> Bands { get; init; } = [];
+
+    /// <summary>What passes beside the medium of a mask; null when not told.</summary>
+    public MaskLeak? Mask { get; init; }
+
+    /// <summary>Whether anything is asked.</summary>
+    public bool IsEmpty => MediaArea is null && Challenges.IsEmpty && Bands.IsEmpty && Mask is null;
+}
+
+/// <summary>An aerosol to send against the medium.</summary>
+/// <param name="Name">What to call it.</param>
+/// <param name="Aerosol">The aerosol.</param>
+/// <param name="FaceVelocity">The velocity that it comes at; null for the operating point's.</param>
+/// <param name="Discharged">Whether the medium counts as discharged.</param>
+public sealed record NamedAerosol(string Name, ChallengeAerosol Aerosol, Speed? FaceVelocity, bool Discharged);
+
+/// <summary>A band of particle size.</summary>
+/// <param name="From">Its lower end; above zero.</param>
+/// <param name="To">Its upper end; above <paramref name="From"/>.</param>
+public sealed record SizeBand(Length From, Length To);
+
+/// <summary>Shares of the inhaled air that come past the medium of a mask.</summary>
+/// <param name="Seal">Through the face seal; dimensionless, 0 to 1.</param>
+/// <param name="Valve">Through the exhalation valve; dimensionless, 0 to 1.</param>
+public sealed record MaskLeak(double Seal, double Valve);
