@@ -29,6 +29,7 @@ public static class FiberScopeProgram
             AssessCommand.Build(console, clock),
             MeasureCommand.Build(console),
             PredictCommand.Build(console),
+            DesignCommand.Build(console),
             SpecimenCommand.Build(console),
         };
         var parsed = root.Parse(arguments);

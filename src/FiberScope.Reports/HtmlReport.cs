@@ -27,36 +27,17 @@ public sealed class HtmlReport : IReportWriter
         ArgumentNullException.ThrowIfNull(assessment);
         ArgumentNullException.ThrowIfNull(destination);
         using var writer = new StreamWriter(destination, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false), leaveOpen: true) { NewLine = "\n" };
-        writer.Write(Markup.Of(
-            $"""
-            <!doctype html>
-            <html lang="en">
-            <head>
-            <meta charset="utf-8">
-            <meta name="viewport" content="width=device-width, initial-scale=1">
-            <meta name="generator" content="{assessment.Recipe.Software}">
-            <meta http-equiv="Content-Security-Policy" content="default-src 'none'; img-src data:; style-src 'unsafe-inline'">
-            <title>{assessment.Identity.Title} – swatch assessment</title>
-            <style>{Stylesheet.Report}</style>
-            </head>
-            <body>
-            <main>
-
-            """));
+        writer.Write(Page.Head($"{assessment.Identity.Title} – swatch assessment", assessment.Recipe.Software));
         foreach (var section in Sections)
         {
             cancellation.ThrowIfCancellationRequested();
             var content = section.Render(assessment);
             if (!content.IsEmpty)
             {
-                writer.Write(Framed(section, content));
+                writer.Write(Page.Section(section.Anchor, section.Heading, content));
             }
         }
 
-        writer.Write("</main>\n</body>\n</html>\n");
+        writer.Write(Page.Foot);
     }
-
-    private static Markup Framed(IReportSection section, Markup content) => section.Heading.Length == 0
-        ? Markup.Of($"<section id=\"{section.Anchor}\">\n{content}\n</section>\n")
-        : Markup.Of($"<section id=\"{section.Anchor}\">\n<h2>{section.Heading}</h2>\n{content}\n</section>\n");
 }

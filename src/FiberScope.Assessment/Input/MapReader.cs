@@ -93,6 +93,49 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
     public Stated<double>? WithinStated(string key, double low, double high) =>
         PureStated(key, value => value >= low && value <= high, FormattableString.Invariant($"must lie from {low} to {high}"));
 
+    /// <summary>A range of quantities, <c>1 um to 4 um</c>, none below zero; null when absent or wrong.</summary>
+    public (T Low, T High)? Range<T>(string key, QuantityKind<T> kind)
+        where T : struct, IQuantity
+    {
+        if (Ends(key, kind.RangeExample) is not { } ends)
+        {
+            return null;
+        }
+
+        if ((QuantityText.Read(ends.Low, kind, out var low) ?? QuantityText.Read(ends.High, kind, out var high)) is { } complaint)
+        {
+            Complain(key, complaint);
+            return null;
+        }
+
+        QuantityText.Read(ends.High, kind, out high);
+        return RangeRuled(key, (double)low!.Value.Value, high!.Value.As(low.Value.Unit)) ? (low.Value, high.Value) : null;
+    }
+
+    /// <summary>A range of pure numbers, <c>0.05 to 0.2</c> or <c>5 % to 20 %</c>, between two limits; null when absent or wrong.</summary>
+    public (double Low, double High)? Range(string key, double least, double most)
+    {
+        if (Ends(key, "0.05 to 0.2") is not { } ends)
+        {
+            return null;
+        }
+
+        if ((QuantityText.ReadPure(ends.Low, out double low) ?? QuantityText.ReadPure(ends.High, out double high)) is { } complaint)
+        {
+            Complain(key, complaint);
+            return null;
+        }
+
+        QuantityText.ReadPure(ends.High, out high);
+        if (low < least || high > most)
+        {
+            Complain(key, FormattableString.Invariant($"'{Text(key)}' must stay from {least} to {most}"));
+            return null;
+        }
+
+        return RangeRuled(key, low, high) ? (low, high) : null;
+    }
+
     /// <summary>One of several words; null when absent or wrong.</summary>
     public T? Choice<T>(string key, IReadOnlyDictionary<string, T> words)
         where T : struct
@@ -147,6 +190,34 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
                 file.Report(key, $"unknown key '{name}'; {hint}");
             }
         }
+    }
+
+    private (string Low, string High)? Ends(string key, string example)
+    {
+        if (Text(key) is not { } text)
+        {
+            return null;
+        }
+
+        var parts = text.Split(" to ", StringSplitOptions.TrimEntries);
+        if (parts.Length == 2)
+        {
+            return (parts[0], parts[1]);
+        }
+
+        Complain(key, $"'{text}' is no range; write both ends, such as {example}");
+        return null;
+    }
+
+    private bool RangeRuled(string key, double low, double high)
+    {
+        if (low >= 0 && low < high)
+        {
+            return true;
+        }
+
+        Complain(key, $"'{Text(key)}' must run upwards from zero or above");
+        return false;
     }
 
     private double? Pure(string key, Func<double, bool> sound, string rule)

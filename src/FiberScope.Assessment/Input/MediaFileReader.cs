@@ -11,6 +11,11 @@ namespace FiberScope.Assessment.Input;
 /// <param name="folder">The folder that relative paths start from.</param>
 internal sealed class MediaFileReader(MapReader map, string folder)
 {
+    private readonly List<FibreMaterial> _materials = [];
+
+    /// <summary>The materials that the layers name; filled while they are read.</summary>
+    public IReadOnlyList<FibreMaterial> Materials => _materials;
+
     public static MediaFile Read(InputText file, string folder)
     {
         var map = new MapReader(file, file.Root);
@@ -84,11 +89,16 @@ internal sealed class MediaFileReader(MapReader map, string folder)
         return traits.PutInto(new MediaLayer { Name = name, Diameters = diameters.Distribution, Thickness = thickness.Value, Solidity = solidity.Value, Uncertainty = isKnown ? known : null });
     }
 
-    private static Stated<Solidity>? SolidityOf(MapReader map, string name, Length? thickness)
+    private Stated<Solidity>? SolidityOf(MapReader map, string name, Length? thickness)
     {
         var told = map.InsideStated("solidity", 0, 1);
         var weight = map.Positive("basis_weight", Kinds.BasisWeight);
         var material = LayerReader.Material(map);
+        if (material is not null)
+        {
+            _materials.Add(material);
+        }
+
         if (map.Has("solidity") == map.Has("basis_weight"))
         {
             map.File.Report(map.Line, $"{name}: give either solidity, or basis_weight with polymer");

@@ -25,6 +25,11 @@ internal sealed class QuantityKind<T>
 
     public string Example { get; }
 
+    /// <summary>A range in the unit of the example.</summary>
+    public string RangeExample => "1" + Unit + " to 40" + Unit;
+
+    private string Unit => Example[Example.IndexOf(' ', StringComparison.Ordinal)..];
+
     /// <summary>Multiples of units that the units library does not know, by their normalised spelling.</summary>
     public FrozenDictionary<string, (double Factor, Enum Unit)> Multiples { get; init; } = FrozenDictionary<string, (double, Enum)>.Empty;
 

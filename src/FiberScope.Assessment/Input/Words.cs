@@ -47,6 +47,17 @@ public static class Words
         ["scattered-light"] = AerosolBasis.ScatteredLight,
     };
 
+    /// <summary>What may change in a layer while a structure is sought, by the word that files use.</summary>
+    public static IReadOnlyDictionary<string, DesignKind> DesignKinds { get; } = new Dictionary<string, DesignKind>(StringComparer.Ordinal)
+    {
+        ["fibre_diameter"] = DesignKind.MedianDiameter,
+        ["gsd"] = DesignKind.DiameterGsd,
+        ["basis_weight"] = DesignKind.BasisWeight,
+        ["solidity"] = DesignKind.Solidity,
+        ["charge"] = DesignKind.Charge,
+        ["weight_share"] = DesignKind.WeightShare,
+    };
+
     /// <summary>Yes and no, as YAML files spell them.</summary>
     public static IReadOnlyDictionary<string, bool> YesOrNo { get; } = new Dictionary<string, bool>(StringComparer.Ordinal)
     {

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Assessment.Designing;
 using FiberScope.Fibres;
 
 namespace FiberScope.Assessment.Json;
@@ -24,4 +25,9 @@ public static class JsonDocuments
     /// <param name="assessment">The assessment.</param>
     /// <param name="destination">Where to; left open.</param>
     public static void Assessment(SwatchAssessment assessment, Stream destination) => JsonText.Write(destination, AssessmentEntry.Of(assessment));
+
+    /// <summary>Writes a design.</summary>
+    /// <param name="finding">The structures found.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void Design(DesignFinding finding, Stream destination) => JsonText.Write(destination, DesignEntry.Of(finding));
 }

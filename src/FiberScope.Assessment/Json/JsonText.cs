@@ -14,7 +14,7 @@ internal static class JsonText
         WriteIndented = true,
         NewLine = "\n",
         Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
-        Converters = { new SevenDigits(), new OnOneLine<ReadingEntry>(), new OnOneLine<double[]>(), new OnOneLine<int[][]>() },
+        Converters = { new SevenDigits(), new OnOneLine<ReadingEntry>(), new OnOneLine<double[]>(), new OnOneLine<int[][]>(), new OnOneLine<bool[]>() },
     };
 
     private static readonly JsonSerializerOptions Compact = new()

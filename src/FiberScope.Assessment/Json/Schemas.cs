@@ -11,4 +11,7 @@ public static class Schemas
 
     /// <summary>A whole assessment.</summary>
     public const string Assessment = "fiberscope/assessment/1";
+
+    /// <summary>The structures that a design search found.</summary>
+    public const string Design = "fiberscope/design/1";
 }
