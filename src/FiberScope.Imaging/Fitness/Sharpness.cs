@@ -23,7 +23,7 @@ internal sealed record Sharpness(double BlurPixels, double ContrastToNoise)
     private const double Quantile = 0.993;
 
     /// <summary>Pictures are looked at in their middle, this many pixels square at most.</summary>
-    private const int LargestSide = 1024;
+    private const int LargestSide = 640;
 
     /// <summary>The widths s of the derivatives; pixels.</summary>
     private static readonly double[] Widths = [1.2, 2.5, 5, 9];

@@ -11,7 +11,7 @@ internal sealed class ShrunkenCopy
     /// <summary>How much thinner.</summary>
     public const double Shrink = 1.5;
 
-    private const int LargestSide = 1150;
+    private const int LargestSide = 800;
 
     private ShrunkenCopy(Micrograph picture, int left, int top, int width, int height)
     {

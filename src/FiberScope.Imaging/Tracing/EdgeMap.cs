@@ -21,6 +21,9 @@ internal sealed class EdgeMap
     public const int Directions = 16;
     private const double Across = 0.9;
 
+    /// <summary>Sine and cosine of every direction of climb, as <see cref="Direction"/> numbers them.</summary>
+    public static readonly (float Sin, float Cos)[] Climbs = [.. Enumerable.Range(0, 2 * Directions).Select(k => MathF.SinCos(MathF.PI * k / Directions))];
+
     private EdgeMap(Plane strength, byte[] direction, double noise, EdgePoint[] points, int[] index)
     {
         Strength = strength;
@@ -155,7 +158,7 @@ internal sealed class EdgeMap
                     continue;
                 }
 
-                var (sin, cos) = MathF.SinCos(MathF.PI * direction[at] / Directions);
+                var (sin, cos) = Climbs[direction[at]];
                 var ahead = strength.Sample(x + cos, y + sin);
                 var behind = strength.Sample(x - cos, y - sin);
                 if (value >= ahead && value > behind)

@@ -94,7 +94,7 @@ internal sealed class FibreTracer
     /// <remarks>A fibre is equally wide along its length: an edge of another fibre that happens to run beside it for a bit is no rival.</remarks>
     private double Rival(List<TrackPoint> track, int level, double width)
     {
-        const int Stations = 5;
+        const int Stations = 3;
         var own = new List<(TrackPoint At, double Score)>();
         for (var s = 0; s < Stations; s++)
         {
@@ -106,7 +106,7 @@ internal sealed class FibreTracer
         }
 
         var best = own.Count == 0 ? 1.0 : 0;
-        for (var wide = 2.2 * width; own.Count > 0 && wide < Math.Min(_widest, 10 * width); wide *= 1.2)
+        for (var wide = 2.2 * width; own.Count > 0 && wide < Math.Min(_widest, 10 * width); wide *= 1.3)
         {
             for (var side = -1; side <= 1; side += 2)
             {

@@ -1,4 +1,6 @@
 using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
+using System.Runtime.Intrinsics.X86;
 using OpenCvSharp;
 
 namespace FiberScope.Imaging.Tracing;
@@ -62,7 +64,7 @@ internal sealed class Plane
         ref var origin = ref Data[0];
         unchecked
         {
-            for (var k = 0; k < into.Length; k++)
+            for (var k = Avx2.IsSupported ? SampleEights(x, y, stepX, stepY, into) : 0; k < into.Length; k++)
             {
                 float px = x + (k * stepX), py = y + (k * stepY);
                 int i = (int)px, j = (int)py;
@@ -74,6 +76,32 @@ internal sealed class Plane
                 into[k] = top + (fy * (bottom - top));
             }
         }
+    }
+
+    /// <summary>Samples as many places as go eight at a time, in the same arithmetic as one at a time; how many that were.</summary>
+    private unsafe int SampleEights(float x, float y, float stepX, float stepY, Span<float> into)
+    {
+        var done = 0;
+        var number = Vector256<float>.Indices;
+        var (x0, y0, dx, dy) = (Vector256.Create(x), Vector256.Create(y), Vector256.Create(stepX), Vector256.Create(stepY));
+        var rowLength = Vector256.Create(Width);
+        fixed (float* data = Data)
+        {
+            for (; done + 8 <= into.Length; done += 8)
+            {
+                var k = number + Vector256.Create((float)done);
+                var (px, py) = (x0 + (k * dx), y0 + (k * dy));
+                var (i, j) = (Avx.ConvertToVector256Int32WithTruncation(px), Avx.ConvertToVector256Int32WithTruncation(py));
+                var (fx, fy) = (px - Avx.ConvertToVector256Single(i), py - Avx.ConvertToVector256Single(j));
+                var at = (j * rowLength) + i;
+                var (a, b) = (Avx2.GatherVector256(data, at, 4), Avx2.GatherVector256(data + 1, at, 4));
+                var (c, d) = (Avx2.GatherVector256(data + Width, at, 4), Avx2.GatherVector256(data + Width + 1, at, 4));
+                var (top, bottom) = (a + (fx * (b - a)), c + (fx * (d - c)));
+                (top + (fy * (bottom - top))).CopyTo(into[done..]);
+            }
+        }
+
+        return done;
     }
 
     /// <summary>A native copy; the caller disposes it.</summary>

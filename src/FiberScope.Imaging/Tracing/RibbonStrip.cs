@@ -8,13 +8,13 @@ internal sealed class RibbonStrip
     private readonly Plane _picture;
     private readonly double _width;
 
-    private RibbonStrip(Plane picture, double width, double[] x, double[] y, double[] half, double step)
+    private RibbonStrip(Plane picture, double width, double[] x, double[] y, double[] half, double step, double columnStep)
     {
         _picture = picture;
         _width = width;
         (X, Y, Half, Step) = (x, y, half, step);
         Rows = x.Length;
-        ColumnStep = Math.Max(0.25, width / 48);
+        ColumnStep = columnStep;
         Reach = (int)Math.Ceiling(((0.95 * width) + 4) / ColumnStep);
         Columns = (2 * Reach) + 1;
         (Nx, Ny) = (new double[Rows], new double[Rows]);
@@ -75,15 +75,19 @@ internal sealed class RibbonStrip
         }
 
         var k = Math.Max(1, 0.35 * width / step);
-        var strip = new RibbonStrip(picture, width, Series.Smooth(x, k), Series.Smooth(y, k), Series.Smooth(half, 2 * k), step);
-        strip.Cut();
-        strip.SmoothAlong(1.5 * strip.Quiet(noise));
-        strip.FindEdges(1);
-        if (!strip.Recentre())
+        var columnStep = Math.Max(0.25, width / 48);
+
+        // The first look only finds the middle: half as many columns do.
+        var first = new RibbonStrip(picture, width, Series.Smooth(x, k), Series.Smooth(y, k), Series.Smooth(half, 2 * k), step, 2 * columnStep);
+        first.Cut();
+        first.SmoothAlong(1.5 * first.Quiet(noise));
+        first.FindEdges(1);
+        if (!first.Recentre())
         {
             return null;
         }
 
+        var strip = new RibbonStrip(picture, width, first.X, first.Y, first.Half, step, columnStep);
         strip.Cut();
         strip.SmoothAlong(strip.Quiet(noise));
         strip.FindEdges(0.7);

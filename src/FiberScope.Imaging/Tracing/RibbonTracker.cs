@@ -8,7 +8,9 @@ internal readonly record struct TrackPoint(float X, float Y, float Normal, float
 /// <summary>Follows a fibre from a seed, both ways, over crossings.</summary>
 internal sealed class RibbonTracker
 {
-    private const int Rows = 7;
+    /// <summary>Weights of rows one spread apart, from two spreads behind to two ahead; Gaussian, of sum 1.</summary>
+    private static readonly float[] RowWeights = [0.0544887f, 0.2442013f, 0.40262f, 0.2442013f, 0.0544887f];
+
     private const float SampleStep = 0.5f;
     private const int MostSteps = 4000;
     private const float TurnStep = 0.075f;
@@ -56,7 +58,7 @@ internal sealed class RibbonTracker
         var (missed, good) = (0f, 0);
         while (track.Count < MostSteps)
         {
-            var step = Math.Clamp(0.4f * state.HalfWidth, 1f, 2.5f);
+            var step = Math.Clamp(0.5f * state.HalfWidth, 1f, 3f);
             var (sin, cos) = MathF.SinCos(state.Normal);
             var ahead = state with { X = state.X - (sign * step * sin), Y = state.Y + (sign * step * cos), Normal = state.Normal + (sign * state.Curl * step) };
             if (ahead.X < 1 || ahead.Y < 1 || ahead.X > _level.Width - 2 || ahead.Y > _level.Height - 2)
@@ -64,7 +66,7 @@ internal sealed class RibbonTracker
                 break;
             }
 
-            var found = Improve(ahead, threshold);
+            var found = Improve(ahead, threshold, look: track.Count % 2 == 0);
             if (found.Score < threshold)
             {
                 missed += step;
@@ -96,20 +98,26 @@ internal sealed class RibbonTracker
     private TrackPoint Full(State s) =>
         new(((s.X + 0.5f) * _scale) - 0.5f, ((s.Y + 0.5f) * _scale) - 0.5f, s.Normal, s.HalfWidth * _scale, s.Score);
 
-    /// <summary>Tries a few directions; in each the profile itself says where the two edges are.</summary>
-    private State Improve(State guess, float threshold)
+    /// <summary>Goes straight on where that does well; else, and on every other step, tries a few directions.</summary>
+    /// <remarks>In each the profile itself says where the two edges are. A fibre's curve is gentle over two steps.</remarks>
+    private State Improve(State guess, float threshold, bool look)
     {
-        var (left, straight, right) = (Turned(guess, -1, threshold), Turned(guess, 0, threshold), Turned(guess, 1, threshold));
-        var best = straight;
-        if (left.Score > best.Score || right.Score > best.Score)
+        var straight = Turned(guess, 0, threshold);
+        if (!look && straight.Score > 0.9f * guess.Score)
         {
-            // The better side leads further; most steps need no such look.
-            best = left.Score > right.Score ? left : right;
-            var further = Turned(guess, left.Score > right.Score ? -2 : 2, threshold);
-            best = further.Score > best.Score ? further : best;
+            return straight;
         }
 
-        return best;
+        var (left, right) = (Turned(guess, -1, threshold), Turned(guess, 1, threshold));
+        if (left.Score <= straight.Score && right.Score <= straight.Score)
+        {
+            return straight;
+        }
+
+        // The better side leads further; most steps need no such look.
+        var best = left.Score > right.Score ? left : right;
+        var further = Turned(guess, left.Score > right.Score ? -2 : 2, threshold);
+        return further.Score > best.Score ? further : best;
     }
 
     private State Turned(State guess, int turns, float threshold)
@@ -155,21 +163,13 @@ internal sealed class RibbonTracker
         var (sin, cos) = MathF.SinCos(at.Normal);
         var spread = Spread(at.HalfWidth);
         Array.Clear(_profile, 0, count);
-        var total = 0f;
-        for (var r = 0; r < Rows; r++)
+        for (var r = 0; r < RowWeights.Length; r++)
         {
-            var along = (r - (Rows / 2)) * spread * 2f / (Rows / 2);
-            var weight = MathF.Exp(-0.5f * along * along / (spread * spread));
+            var along = (r - (RowWeights.Length / 2)) * spread;
             var (x, y) = (at.X - (along * sin) - (reach * SampleStep * cos), at.Y + (along * cos) - (reach * SampleStep * sin));
-            total += weight;
             var line = _slope.AsSpan(0, count);
             _level.SampleLine(x, y, SampleStep * cos, SampleStep * sin, line);
-            TensorPrimitives.MultiplyAdd(line, weight, _profile.AsSpan(0, count), _profile.AsSpan(0, count));
-        }
-
-        for (var i = 0; i < count; i++)
-        {
-            _profile[i] /= total;
+            TensorPrimitives.MultiplyAdd(line, RowWeights[r], _profile.AsSpan(0, count), _profile.AsSpan(0, count));
         }
     }
 

@@ -87,7 +87,7 @@ internal static class SeedFinder
     private static float Lateral(EdgeMap map, int i, int j, EdgePoint from)
     {
         var at = (j * map.Strength.Width) + i;
-        var (sin, cos) = MathF.SinCos(MathF.PI * map.Direction[at] / EdgeMap.Directions);
+        var (sin, cos) = EdgeMap.Climbs[map.Direction[at]];
         return map.Strength.Data[at] * Math.Abs((cos * from.Nx) + (sin * from.Ny));
     }
 

@@ -10,7 +10,8 @@ internal static class Series
             return 0;
         }
 
-        var sorted = values.Order().ToArray();
+        var sorted = (double[])values.Clone();
+        Array.Sort(sorted);
         return sorted.Length % 2 == 1 ? sorted[sorted.Length / 2] : 0.5 * (sorted[(sorted.Length / 2) - 1] + sorted[sorted.Length / 2]);
     }
 

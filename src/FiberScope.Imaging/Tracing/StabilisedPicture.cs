@@ -71,7 +71,13 @@ internal sealed class StabilisedPicture
         var response = native.T(new Mat());
         Cv2.Filter2D(source, response, MatType.CV_32F, kernel);
         var values = Plane.FromMat(response).Data;
-        var sample = values.Where((_, i) => i % 7 == 0).Select(Math.Abs).Order().ToArray();
+        var sample = new float[(values.Length + 6) / 7];
+        for (var i = 0; i < sample.Length; i++)
+        {
+            sample[i] = Math.Abs(values[7 * i]);
+        }
+
+        Array.Sort(sample);
         return Math.Max(1e-4, sample[sample.Length / 2] / NormalMedian / 6);
     }
 
