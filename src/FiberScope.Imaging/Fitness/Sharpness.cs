@@ -23,7 +23,7 @@ internal sealed record Sharpness(double BlurPixels, double ContrastToNoise)
     private const double Quantile = 0.993;
 
     /// <summary>Pictures are looked at in their middle, this many pixels square at most.</summary>
-    private const int LargestSide = 640;
+    private const int LargestSide = 1024;
 
     /// <summary>The widths s of the derivatives; pixels.</summary>
     private static readonly double[] Widths = [1.2, 2.5, 5, 9];
@@ -39,7 +39,7 @@ internal sealed record Sharpness(double BlurPixels, double ContrastToNoise)
         Cv2.Resize(middle, half, new Size(Math.Max(1, width / 2), Math.Max(1, height / 2)), interpolation: InterpolationFlags.Area);
 
         // Wide derivatives see nothing that half the pixels do not show; the mean of four pixels halves their noise.
-        var answers = Widths.Select(s => s > Along ? Answer(half, s / 2, Along / 2, noise / 2) : Answer(middle, s, Along, noise)).ToArray();
+        var answers = Widths.Select(s => s > 2 ? Answer(half, s / 2, Along / 2, noise / 2) : Answer(middle, s, Along, noise)).ToArray();
         var contrast = answers.Max();
         return new Sharpness(contrast < noise / 4 ? Widths[^1] : Blur(answers), contrast / noise);
     }

@@ -6,13 +6,16 @@ internal static class EdgePath
 {
     private const float TurnCost = 0.04f;
 
+    /// <summary>Farther from the wanted offset than this many tolerances no edge is looked for.</summary>
+    private const float Widest = 1.6f;
+
     /// <summary>The median over rows of the strongest outward fall near the wanted offsets.</summary>
     public static double TypicalFall(RibbonStrip strip)
     {
         var best = new double[strip.Rows];
         for (var r = 0; r < strip.Rows; r++)
         {
-            var tolerance = Math.Max(0.9, 0.32 * strip.Half[r]);
+            var tolerance = Tolerance(strip, r, tightness: 1);
             for (var side = -1; side <= 1; side += 2)
             {
                 var (from, to) = (strip.Column(side * (strip.Half[r] - tolerance)), strip.Column(side * (strip.Half[r] + tolerance)));
@@ -33,28 +36,48 @@ internal static class EdgePath
     /// <param name="typical">The usual fall, from <see cref="TypicalFall"/>.</param>
     public static void Find(RibbonStrip strip, EdgeTrack edge, int side, double tightness, double typical)
     {
-        var columns = strip.Reach + 1;
+        var (first, last) = Band(strip, tightness);
+        var columns = last - first + 1;
         var fall = new float[strip.Rows * columns];
         var merit = new float[strip.Rows * columns];
+        var share = (float)(1 / typical);
         for (var r = 0; r < strip.Rows; r++)
         {
-            var tolerance = Math.Max(0.9, 0.32 * strip.Half[r]) * tightness;
+            var scale = (float)(1 / Tolerance(strip, r, tightness));
+            var (step, half) = ((float)strip.ColumnStep, (float)strip.Half[r]);
             for (var c = 0; c < columns; c++)
             {
                 var at = (r * columns) + c;
-                fall[at] = -side * strip.Slope[(r * strip.Columns) + strip.Reach + (side * c)];
-                var off = ((c * strip.ColumnStep) - strip.Half[r]) / tolerance;
-                merit[at] = Math.Abs(off) > 1.6 ? -4 : (float)(Math.Min(fall[at] / typical, 1.5) - (0.5 * off * off));
+                var value = -side * strip.Slope[(r * strip.Columns) + strip.Reach + (side * (first + c))];
+                var off = (((first + c) * step) - half) * scale;
+                fall[at] = value;
+                merit[at] = Math.Abs(off) > Widest ? -4 : Math.Min(value * share, 1.5f) - (0.5f * off * off);
             }
         }
 
         var path = Best(merit, strip.Rows, columns);
         for (var r = 0; r < strip.Rows; r++)
         {
-            var tolerance = Math.Max(0.9, 0.32 * strip.Half[r]) * tightness;
-            var reach = Math.Max((int)Math.Ceiling(0.6 / strip.ColumnStep), (int)(0.35 * tolerance / strip.ColumnStep));
-            Climb(fall.AsSpan(r * columns, columns), path[r], reach, strip.ColumnStep, edge, r);
+            var reach = Math.Max((int)Math.Ceiling(0.6 / strip.ColumnStep), (int)(0.35 * Tolerance(strip, r, tightness) / strip.ColumnStep));
+            Climb(fall.AsSpan(r * columns, columns), first, path[r], reach, strip.ColumnStep, edge, r);
         }
+    }
+
+    /// <summary>How far from its wanted offset an edge may be, about; pixels.</summary>
+    private static double Tolerance(RibbonStrip strip, int row, double tightness) => Math.Max(0.9, 0.32 * strip.Half[row]) * tightness;
+
+    /// <summary>The columns out from the centre line that any row's edge may lie in, with room to climb to the steepest.</summary>
+    private static (int First, int Last) Band(RibbonStrip strip, double tightness)
+    {
+        var (low, high) = (double.PositiveInfinity, 0.0);
+        for (var r = 0; r < strip.Rows; r++)
+        {
+            var away = (Widest + 0.5) * Tolerance(strip, r, tightness);
+            (low, high) = (Math.Min(low, strip.Half[r] - away), Math.Max(high, strip.Half[r] + away));
+        }
+
+        var first = Math.Clamp((int)(low / strip.ColumnStep) - 2, 0, strip.Reach - 4);
+        return (first, Math.Clamp((int)(high / strip.ColumnStep) + 2, first + 4, strip.Reach));
     }
 
     private static int[] Best(float[] merit, int rows, int columns)
@@ -95,7 +118,7 @@ internal static class EdgePath
     }
 
     /// <summary>From the path to the nearest local maximum, then a parabola through three samples.</summary>
-    private static void Climb(ReadOnlySpan<float> fall, int start, int reach, double columnStep, EdgeTrack edge, int row)
+    private static void Climb(ReadOnlySpan<float> fall, int first, int start, int reach, double columnStep, EdgeTrack edge, int row)
     {
         var j = Math.Clamp(start, 1, fall.Length - 2);
         var found = false;
@@ -119,7 +142,7 @@ internal static class EdgePath
         j = Math.Clamp(j, 1, fall.Length - 2);
         var bend = fall[j - 1] - (2 * fall[j]) + fall[j + 1];
         var shift = found && bend < 0 ? 0.5 * (fall[j - 1] - fall[j + 1]) / bend : 0;
-        edge.Offset[row] = (j + shift) * columnStep;
+        edge.Offset[row] = (first + j + shift) * columnStep;
         edge.Fall[row] = fall[j];
         edge.Found[row] = found;
     }

@@ -15,7 +15,7 @@ internal sealed class RibbonStrip
         (X, Y, Half, Step) = (x, y, half, step);
         Rows = x.Length;
         ColumnStep = columnStep;
-        Reach = (int)Math.Ceiling(((0.95 * width) + 4) / ColumnStep);
+        Reach = (int)Math.Ceiling(((0.85 * width) + 4) / ColumnStep);
         Columns = (2 * Reach) + 1;
         (Nx, Ny) = (new double[Rows], new double[Rows]);
         Values = new float[Rows * Columns];
