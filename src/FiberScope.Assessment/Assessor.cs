@@ -80,13 +80,13 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
         }
 
         MediaLayer[] media = [.. layers.Zip(swatch.Layers, (found, told) => told.Traits.PutInto(LayerMedia.Of(found)))];
-        return new SwatchPrediction(media, operation, swatch.Request, ForecastSettingsOf(swatch), cancellation);
+        return new SwatchPrediction(Predictor.Calibrated(media, swatch.Request), operation, swatch.Request, ForecastSettingsOf(swatch), cancellation);
     }
 
     private ForecastSettings ForecastSettingsOf(SwatchFile swatch)
     {
-        var standard = new ForecastSettings();
-        return standard with { Correlations = settings.Correlations ?? swatch.Correlations ?? standard.Correlations, Seed = settings.Measuring.Seed };
+        var standard = new ForecastSettings { Seed = settings.Measuring.Seed };
+        return Predictor.Settings(swatch.Request, settings.Correlations ?? swatch.Correlations, standard);
     }
 
     private static ImmutableArray<RigPoint> RigPoints(SwatchFile swatch, SwatchPrediction? prediction) => prediction is null

@@ -45,6 +45,10 @@ internal static class RecipeKeeping
         {
             yield return Entry("correlations", Words.Of(Words.Correlations, chosen), isDefault: false);
         }
+        else if (swatch.Request.Calibration is { } calibration)
+        {
+            yield return new RecipeEntry("correlations", Words.Of(Words.Correlations, calibration.Correlations), "calibration");
+        }
         else if (swatch.Correlations is null)
         {
             yield return Entry("correlations", Words.Of(Words.Correlations, new Filtration.ForecastSettings().Correlations), isDefault: true);

@@ -30,6 +30,7 @@ public static class FiberScopeProgram
             MeasureCommand.Build(console),
             PredictCommand.Build(console),
             DesignCommand.Build(console),
+            CalibrateCommand.Build(console),
             SpecimenCommand.Build(console),
         };
         var parsed = root.Parse(arguments);

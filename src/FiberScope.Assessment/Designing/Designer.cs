@@ -1,4 +1,6 @@
 using FiberScope.Assessment.Input;
+using FiberScope.Assessment.Predicting;
+using FiberScope.Fibres;
 using FiberScope.Filtration;
 
 namespace FiberScope.Assessment.Designing;
@@ -21,7 +23,7 @@ public static class Designer
     public static DesignFinding Run(DesignFile design, ForecastSettings settings, CancellationToken cancellation)
     {
         var steps = (int)Math.Clamp(Math.Pow(Trials, 1.0 / design.Variables.Length), FewestSteps, MostSteps);
-        var candidates = Search(design.Start.Layers, design, settings).Search(steps, Kept);
+        var candidates = Search(Predictor.Calibrated(design.Start.Layers, design.Start.Request), design, settings).Search(steps, Kept);
         cancellation.ThrowIfCancellationRequested();
         var best = candidates[0];
         DesignMap? map = null;
@@ -32,13 +34,14 @@ public static class Designer
         }
 
         cancellation.ThrowIfCancellationRequested();
+        Caveat[] calibrated = design.Start.Request.Calibration is { } calibration ? [calibration.Note, .. calibration.Caveats] : [];
         return new DesignFinding
         {
             Design = design,
             Correlations = settings.Correlations,
             Candidates = candidates,
             Map = map,
-            Caveats = MediaModel.Forecast(best.Layers, design.Start.Operation, settings with { Draws = 0 }).Caveats,
+            Caveats = [.. calibrated, .. MediaModel.Forecast(best.Layers, design.Start.Operation, settings with { Draws = 0 }).Caveats],
         };
     }
 

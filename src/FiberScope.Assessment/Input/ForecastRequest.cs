@@ -19,8 +19,8 @@ public sealed record ForecastRequest
     /// <summary>What passes beside the medium of a mask; null when not told.</summary>
     public MaskLeak? Mask { get; init; }
 
-    /// <summary>Whether anything is asked.</summary>
-    public bool IsEmpty => MediaArea is null && Challenges.IsEmpty && Bands.IsEmpty && Mask is null;
+    /// <summary>What earlier rolls of the grade taught; null without a calibration.</summary>
+    public GradeCalibration? Calibration { get; init; }
 }
 
 /// <summary>An aerosol to send against the medium.</summary>

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using FiberScope.Conformity;
+using FiberScope.Filtration;
 using FiberScope.Statistics;
 using UnitsNet;
 using YamlDotNet.RepresentationModel;
@@ -13,15 +14,19 @@ public static class GradeReader
 
     /// <summary>Reads and checks a grade file.</summary>
     /// <exception cref="InputException">The file cannot be read or something in it is wrong; every problem is listed.</exception>
-    public static Grade Read(string path) => Read(InputText.FromFile(path));
+    public static Grade Read(string path) => Read(InputText.FromFile(path), Path.GetDirectoryName(Path.GetFullPath(path))!, null).Grade;
 
     /// <summary>Reads and checks the text of a grade file.</summary>
     /// <param name="text">The YAML text.</param>
     /// <param name="name">The name to use in messages.</param>
     /// <exception cref="InputException">Something in the text is wrong; every problem is listed.</exception>
-    public static Grade Parse(string text, string name) => Read(new InputText(name, text));
+    public static Grade Parse(string text, string name) => Read(new InputText(name, text), Directory.GetCurrentDirectory(), null).Grade;
 
-    internal static Grade Read(InputText file)
+    /// <summary>The grade, and the calibration that it names.</summary>
+    /// <param name="file">The text.</param>
+    /// <param name="folder">The folder that relative paths start from.</param>
+    /// <param name="correlations">The correlations that a swatch file asks for.</param>
+    internal static (Grade Grade, CalibrationKey? Calibration) Read(InputText file, string folder, CorrelationSet? correlations)
     {
         var map = new MapReader(file, file.Root);
         var name = map.Text("grade");
@@ -38,9 +43,10 @@ public static class GradeReader
             file.Report(1, "limits is missing; add at least one, such as 'limits: {mean_diameter: {at_most: 2.4 um}}'");
         }
 
+        var calibration = CalibrationKey.Read(map, folder, correlations);
         map.RejectUnknownKeys();
         file.ThrowIfProblems();
-        return new Grade(revision is null ? name! : $"{name} revision {revision}", limits);
+        return (new Grade(revision is null ? name! : $"{name} revision {revision}", limits), calibration);
     }
 
     private static double? Risk(MapReader map) => map.Inside("maximum_risk", 0, HighestRisk);

@@ -14,6 +14,9 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
 
     public bool Has(string key) => Find(key) is not null;
 
+    /// <summary>Whether a key is there, without making it one that is known here.</summary>
+    public bool HasKey(string key) => node.Children.Keys.Any(k => k is YamlScalarNode scalar && scalar.Value == key);
+
     /// <summary>The value of a key, whatever it is; null when absent.</summary>
     public YamlNode? Find(string key)
     {

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Assessment.Json;
 using FiberScope.Fibres;
 using FiberScope.Filtration;
 using UnitsNet;
@@ -37,21 +38,45 @@ internal sealed class MediaFileReader(MapReader map, string folder)
         }
 
         var layers = Layers();
+        var calibration = CalibrationKey.Read(map, folder, correlations)?.Calibration;
         return operation is null
             ? null
-            : new MediaFile { Name = map.File.Name, Layers = layers, Operation = operation, Request = request, Correlations = correlations };
+            : new MediaFile { Name = map.File.Name, Layers = layers, Operation = operation, Request = request with { Calibration = calibration }, Correlations = correlations };
     }
 
     /// <summary>The layers that could be read.</summary>
     public ImmutableArray<MediaLayer> Layers()
     {
+        if (map.Text("assessment") is { } assessment)
+        {
+            return Assessed(assessment);
+        }
+
         var items = map.Items("layers");
         if (items.Count == 0)
         {
-            map.File.Report(map.Line, "layers is missing or empty; list at least one layer, upstream first");
+            map.File.Report(map.Line, "layers is missing or empty; list at least one layer, upstream first, or name an assessment: 'assessment: R-07/assessment.json'");
         }
 
         return [.. items.Select(Layer).OfType<MediaLayer>()];
+    }
+
+    private ImmutableArray<MediaLayer> Assessed(string path)
+    {
+        if (map.Has("layers"))
+        {
+            map.Complain("layers", "stands beside 'assessment'; give one of the two");
+        }
+
+        try
+        {
+            return AssessedLayers.Read(Path.Combine(folder, path));
+        }
+        catch (InputException e)
+        {
+            map.Complain("assessment", e.Message);
+            return [];
+        }
     }
 
     private MediaLayer? Layer(YamlNode item, int index)

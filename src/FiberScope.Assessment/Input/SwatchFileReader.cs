@@ -27,7 +27,13 @@ internal static class SwatchFileReader
         var tests = RigTests(map, operation);
         var hashes = ImmutableSortedDictionary.CreateBuilder<string, string>(StringComparer.Ordinal);
         hashes[file.Name] = file.Sha256;
-        var grade = ReadGrade(map, folder, hashes);
+        var (grade, ofGrade) = ReadGrade(map, folder, hashes, correlations);
+        var calibration = CalibrationKey.Read(map, folder, correlations) ?? ofGrade;
+        if (calibration is not null)
+        {
+            hashes[calibration.Name] = calibration.Sha256;
+        }
+
         map.RejectUnknownKeys();
         file.ThrowIfProblems();
         return new SwatchFile
@@ -37,7 +43,7 @@ internal static class SwatchFileReader
             Identity = identity,
             Layers = layers,
             Operation = operation,
-            Request = request,
+            Request = request with { Calibration = calibration?.Calibration },
             Correlations = correlations,
             RigTests = tests,
             Grade = grade,
@@ -47,23 +53,23 @@ internal static class SwatchFileReader
     }
 
     /// <summary>The grade that the file names; its own problems join those of the swatch file.</summary>
-    private static Grade? ReadGrade(MapReader map, string folder, ImmutableSortedDictionary<string, string>.Builder hashes)
+    private static (Grade? Grade, CalibrationKey? Calibration) ReadGrade(MapReader map, string folder, ImmutableSortedDictionary<string, string>.Builder hashes, CorrelationSet? correlations)
     {
         if (map.Text("grade") is not { } path)
         {
-            return null;
+            return (null, null);
         }
 
         try
         {
             var text = InputText.FromFile(Path.Combine(folder, path), Path.Combine(Path.GetDirectoryName(map.File.Name) ?? "", path));
             hashes[path] = text.Sha256;
-            return GradeReader.Read(text);
+            return GradeReader.Read(text, Path.GetDirectoryName(Path.Combine(folder, path))!, correlations);
         }
         catch (InputException e)
         {
             map.File.Report(e.Problems);
-            return null;
+            return (null, null);
         }
     }
 

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Assessment.Calibrating;
 using FiberScope.Assessment.Designing;
 using FiberScope.Fibres;
 
@@ -30,4 +31,9 @@ public static class JsonDocuments
     /// <param name="finding">The structures found.</param>
     /// <param name="destination">Where to; left open.</param>
     public static void Design(DesignFinding finding, Stream destination) => JsonText.Write(destination, DesignEntry.Of(finding));
+
+    /// <summary>Writes a grade's calibration.</summary>
+    /// <param name="finding">What was learnt.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void Calibration(CalibrationFinding finding, Stream destination) => JsonText.Write(destination, CalibrationEntry.Of(finding));
 }

@@ -16,7 +16,10 @@ public static class MeasurementFile
 
     /// <summary>The diameters behind the readings, with the uncertainties that the file tells.</summary>
     /// <inheritdoc cref="Readings(string, string?)" path="/param|/exception"/>
-    internal static FibreDiameters Diameters(string path, string? layer) => Read(path, layer, measurement =>
+    internal static FibreDiameters Diameters(string path, string? layer) => Read(path, layer, measurement => Diameters(measurement, path));
+
+    /// <summary>The diameters of a measurement, with the uncertainties that it tells.</summary>
+    internal static FibreDiameters Diameters(JsonElement measurement, string path)
     {
         var readings = Readings(measurement, path);
         var pooled = measurement.GetProperty("pooled");
@@ -28,7 +31,7 @@ public static class MeasurementFile
         var lengths = readings.GroupBy(r => (r.Field, r.Fibre)).Select(g => g.Sum(r => r.RepresentedLength.Meters)).ToArray();
         var effective = Math.Pow(lengths.Sum(), 2) / lengths.Sum(l => l * l);
         return new FibreDiameters(DiameterDistribution.FromReadings(readings), Math.Min(1, Math.Sqrt(squares)), effective);
-    });
+    }
 
     private static DiameterReading[] Readings(JsonElement measurement, string path)
     {
@@ -36,23 +39,8 @@ public static class MeasurementFile
         return readings.Length > 0 ? readings : throw new InputException($"{path}: holds no readings");
     }
 
-    private static T Read<T>(string path, string? layer, Func<JsonElement, T> use)
-    {
-        try
-        {
-            using var stream = File.OpenRead(path);
-            using var document = JsonDocument.Parse(stream);
-            return use(Measurement(document.RootElement, path, layer));
-        }
-        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
-        {
-            throw new InputException($"{path}: {(File.Exists(path) ? "cannot be read" : "no such file")}", e);
-        }
-        catch (Exception e) when (e is JsonException or KeyNotFoundException or InvalidOperationException or FormatException)
-        {
-            throw new InputException($"{path}: is not a measurement file of schema {Schemas.Measurement} or {Schemas.Assessment}", e);
-        }
-    }
+    private static T Read<T>(string path, string? layer, Func<JsonElement, T> use) => JsonFile.Read(
+        path, $"a measurement file of schema {Schemas.Measurement} or {Schemas.Assessment}", root => use(Measurement(root, path, layer)));
 
     private static JsonElement Measurement(JsonElement root, string path, string? layer)
     {

@@ -14,4 +14,7 @@ public static class Schemas
 
     /// <summary>The structures that a design search found.</summary>
     public const string Design = "fiberscope/design/1";
+
+    /// <summary>What the rolls of a grade taught.</summary>
+    public const string Calibration = "fiberscope/calibration/1";
 }

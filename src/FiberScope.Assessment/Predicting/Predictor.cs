@@ -22,8 +22,38 @@ public static class Predictor
         return MediaModel.Forecast(layers, operation, settings);
     }
 
+    /// <summary>The forecast of a media file with everything that it asks besides.</summary>
+    /// <param name="media">The checked media file.</param>
+    /// <param name="chosen">The correlations to use whatever the file says; null to leave it to the file.</param>
+    /// <param name="standard">Draws and seed.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <exception cref="InputException">The correlations chosen are not the calibration's.</exception>
+    public static MediaPrediction Predict(MediaFile media, CorrelationSet? chosen, ForecastSettings standard, CancellationToken cancellation)
+    {
+        var settings = Settings(media.Request, chosen ?? media.Correlations, standard);
+        return Predict(Calibrated(media.Layers, media.Request), media.Operation, media.Request, settings, cancellation);
+    }
+
+    /// <summary>The layers with what the calibration teaches; as they are without one.</summary>
+    public static IReadOnlyList<MediaLayer> Calibrated(IReadOnlyList<MediaLayer> layers, ForecastRequest request) =>
+        request.Calibration is { } calibration ? calibration.Apply(layers) : layers;
+
+    /// <summary>The settings with the correlations asked for, or those that the calibration holds for.</summary>
+    /// <exception cref="InputException">Others were asked for than the calibration's.</exception>
+    public static ForecastSettings Settings(ForecastRequest request, CorrelationSet? asked, ForecastSettings standard)
+    {
+        if (request.Calibration is not { } calibration)
+        {
+            return standard with { Correlations = asked ?? standard.Correlations };
+        }
+
+        return asked is null || asked == calibration.Correlations
+            ? standard with { Correlations = calibration.Correlations }
+            : throw new InputException($"The calibration of grade {calibration.Grade} holds for the correlations {Words.Of(Words.Correlations, calibration.Correlations)}; leave the choice of others out, or calibrate again with them.");
+    }
+
     /// <summary>The forecast at the operating point with everything that is asked besides.</summary>
-    /// <param name="layers">The layers, upstream first.</param>
+    /// <param name="layers">The layers, upstream first, already with what a calibration teaches.</param>
     /// <param name="operation">How the medium is used.</param>
     /// <param name="request">What is asked.</param>
     /// <param name="settings">Correlations, uncertainties and draws.</param>
@@ -31,6 +61,11 @@ public static class Predictor
     public static MediaPrediction Predict(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastRequest request, ForecastSettings settings, CancellationToken cancellation)
     {
         var forecast = Forecast(layers, operation, settings, cancellation);
+        if (request.Calibration is { } calibration)
+        {
+            forecast = forecast with { Caveats = [calibration.Note, .. calibration.Caveats, .. forecast.Caveats] };
+        }
+
         var findings = new RequestedFindings(layers, operation, request, settings);
         cancellation.ThrowIfCancellationRequested();
         return new MediaPrediction

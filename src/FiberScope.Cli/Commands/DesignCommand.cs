@@ -2,6 +2,7 @@ using System.CommandLine;
 using FiberScope.Assessment.Designing;
 using FiberScope.Assessment.Input;
 using FiberScope.Assessment.Json;
+using FiberScope.Assessment.Predicting;
 using FiberScope.Cli.Console;
 using FiberScope.Cli.Output;
 using FiberScope.Filtration;
@@ -41,7 +42,7 @@ internal static class DesignCommand
                 : DesignFile.Read(source);
             var folder = wanted ?? (json is null ? DefaultFolder() : null);
             Probe(folder);
-            var settings = standard with { Correlations = correlations ?? design.Start.Correlations ?? standard.Correlations };
+            var settings = Predictor.Settings(design.Start.Request, correlations ?? design.Start.Correlations, standard);
             var finding = Designer.Run(design, settings, cancellation);
             Write(finding, folder, cancellation);
         }

@@ -40,7 +40,7 @@ internal static class PredictCommand
             OutputBatch.ProbeFile(json);
         }
 
-        var prediction = Predictor.Predict(media.Layers, media.Operation, media.Request, standard with { Correlations = correlations ?? media.Correlations ?? standard.Correlations }, cancellation);
+        var prediction = Predictor.Predict(media, correlations, standard, cancellation);
         if (json == "-")
         {
             JsonDocuments.Prediction(prediction, console.Output);

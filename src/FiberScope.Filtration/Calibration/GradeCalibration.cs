@@ -64,13 +64,17 @@ public sealed record GradeCalibration
     public MediaForecast Forecast(IReadOnlyList<MediaLayer> layers, OperatingPoint point, ForecastSettings? settings = null)
     {
         var forecast = MediaModel.Forecast(Apply(layers), point, (settings ?? new ForecastSettings()) with { Correlations = Correlations });
-        return forecast with { Caveats = [Note(), .. forecast.Caveats] };
+        return forecast with { Caveats = [Note, .. forecast.Caveats] };
     }
 
-    private Caveat Note()
+    /// <summary>Says that a forecast was calibrated and how; it belongs to every forecast that uses the calibration.</summary>
+    public Caveat Note
     {
-        var error = LeaveOneOutPenetrationError is { } e ? FormattableString.Invariant($"; left out one at a time they were forecast within {e:F3} of penetration (root mean square)") : "";
-        return new Caveat("calibrated", FormattableString.Invariant($"Calibrated for grade {Grade} on {Rolls.Length} roll(s), inhomogeneity factor {InhomogeneityFactor:G3}, basis-weight variation {BasisWeightVariation:P0}, open area {OpenArea * 100:G2} %, charge {Charge.CoulombsPerSquareMeter * 1e6:G3} µC/m²{error}."));
+        get
+        {
+            var error = LeaveOneOutPenetrationError is { } e ? FormattableString.Invariant($"; left out one at a time they were forecast within {e:F3} of penetration (root mean square)") : "";
+            return new Caveat("calibrated", FormattableString.Invariant($"Calibrated for grade {Grade} on {Rolls.Length} roll(s), inhomogeneity factor {InhomogeneityFactor:G3}, basis-weight variation {BasisWeightVariation * 100:F0} %, open area {OpenArea * 100:G2} %, charge {Charge.CoulombsPerSquareMeter * 1e6:G3} µC/m²{error}."));
+        }
     }
 
     /// <summary>Fits a grade's factors to its rolls.</summary>
