@@ -38,7 +38,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             RigPoints = RigPoints(swatch, prediction),
             Verdict = swatch.Grade is null ? null : new GradeJudging(layers, layers[0], prediction?.Findings()).Judge(swatch.Grade),
             Recipe = RecipeKeeping.Of(swatch, settings, layers, clock.GetUtcNow()),
-            Caveats = [.. pools.SelectMany(p => p.Caveats), .. layers.SelectMany(l => l.Solidity?.Caveats ?? []), .. prediction?.Forecast.Caveats ?? [], .. Missing(swatch)],
+            Caveats = [.. pools.SelectMany(p => p.Caveats), .. layers.SelectMany(l => l.Solidity?.Caveats ?? []), .. layers.SelectMany(Unmeasured), .. prediction?.Forecast.Caveats ?? [], .. Missing(swatch)],
         };
     }
 
@@ -56,7 +56,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
 
     private static LayerFinding Layer(SwatchLayer layer, ImmutableArray<FieldFinding> fields, DiameterSurvey survey)
     {
-        var routes = SolidityRoutes.Of(layer);
+        var routes = SolidityRoutes.Of(layer, fields, survey);
         return new LayerFinding
         {
             Name = layer.Name,
@@ -92,6 +92,15 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
     private static ImmutableArray<RigPoint> RigPoints(SwatchFile swatch, SwatchPrediction? prediction) => prediction is null
         ? [.. swatch.RigTests.Select(t => new RigPoint(t.FaceVelocity, t.PressureDrop, t.Particle, t.Penetration, null, null))]
         : prediction.Compare(swatch.RigTests);
+
+    private static IEnumerable<Caveat> Unmeasured(LayerFinding layer)
+    {
+        if (layer.Solidity is { Routes: [{ Route: SolidityRoute.TopView }] })
+        {
+            var where = layer.Name.Length > 0 ? $"layer '{layer.Name}': " : "";
+            yield return new Caveat("solidity-not-measured", $"{where}The solidity is not measured but only what is usual for fibre media; the forecast's band from it is wide. Give basis weight and polymer, a solidity, or cross-section images.");
+        }
+    }
 
     private static IEnumerable<Caveat> Missing(SwatchFile swatch)
     {

@@ -20,14 +20,17 @@ public static class ImageSolidity
     /// <param name="meanDiameter">⟨d⟩, the length-weighted mean diameter.</param>
     /// <param name="standardDeviation">The length-weighted standard deviation of the diameters; zero or above.</param>
     /// <param name="thickness">t, the layer's thickness; above zero.</param>
+    /// <param name="outline">The relative standard uncertainty of the coverage that where the outlines lie leaves open; dimensionless.</param>
+    /// <param name="thicknessUncertainty">The relative standard uncertainty of the thickness; dimensionless.</param>
+    /// <param name="seen">How the layer was looked at, for people.</param>
     /// <exception cref="ArgumentException">There are no coverages, or the solidity that they give is not in (0, 1).</exception>
     /// <remarks>
     /// Straight fibres laid at random in a plane cover 1 − exp(−Σ L d / A) (the Poisson law of coverage; P. Hall 1988, from memory), and
     /// their volume is Σ L π d² / 4; with one diameter this is C = 1 − exp(−4 α t / (π d)).
     /// </remarks>
-    public static SolidityEstimate FromCoverage(IReadOnlyList<double> coverages, Length meanDiameter, Length standardDeviation, Length thickness)
+    public static SolidityEstimate FromCoverage(IReadOnlyList<double> coverages, Length meanDiameter, Length standardDeviation, Length thickness, double outline = 0.04, double thicknessUncertainty = 0, string seen = "in transmitted light")
     {
-        var (coverage, uncertainty) = Mean(coverages, 0.04);
+        var (coverage, uncertainty) = Mean(coverages, outline);
         var (d, s) = (meanDiameter.Meters, standardDeviation.Meters);
         var slope = Math.PI / 4 * ((d * d) + (s * s)) / d / thickness.Meters;
         var value = -Math.Log(1 - coverage) * slope;
@@ -36,7 +39,8 @@ public static class ImageSolidity
             throw new ArgumentException("The coverage and thickness give no solidity between 0 and 1.", nameof(coverages));
         }
 
-        return new SolidityEstimate(SolidityRoute.Coverage, new Solidity(value), slope * uncertainty / (1 - coverage), FormattableString.Invariant($"Coverage {coverage:F3} in transmitted light, mean of {coverages.Count} field(s)."));
+        var total = Math.Sqrt(Math.Pow(slope * uncertainty / (1 - coverage), 2) + Math.Pow(thicknessUncertainty * value, 2));
+        return new SolidityEstimate(SolidityRoute.Coverage, new Solidity(value), total, FormattableString.Invariant($"Coverage {coverage:F3} {seen}, mean of {coverages.Count} field(s); from fibres laid at random in the plane."));
     }
 
     /// <summary>The mean and its standard uncertainty: the fields' scatter, and the doubt of where the outline lies.</summary>

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Imaging.Coverage;
 using FiberScope.Imaging.Defects;
 using FiberScope.Imaging.Edges;
 using FiberScope.Imaging.Fitness;
@@ -67,6 +68,7 @@ public static class FieldMeter
             Defects = defects,
             DetectionLimitPixels = Math.Max(2.5, 2 * blur),
             BlurPixels = blur,
+            FibreShare = micrograph.Mode == ImagingMode.SecondaryElectron ? GroundCoverage.Of(micrograph, readings, settings.Coverage) : null,
             Algorithm = Algorithm,
         };
     }

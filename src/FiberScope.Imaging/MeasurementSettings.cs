@@ -1,3 +1,4 @@
+using FiberScope.Imaging.Coverage;
 using FiberScope.Imaging.Defects;
 using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Sections;
@@ -19,4 +20,7 @@ public sealed record MeasurementSettings
 
     /// <summary>How cut fibres are read in a section.</summary>
     public SectionSettings Sections { get; init; } = new();
+
+    /// <summary>When and how the share of a field that fibres cover is told.</summary>
+    public CoverageSettings Coverage { get; init; } = new();
 }

@@ -53,6 +53,12 @@ public sealed record SpecimenTruth
     /// <summary>Fibre volume over mat volume; for a section the area share of cut fibres in the picture.</summary>
     public required double Solidity { get; init; }
 
+    /// <summary>
+    /// Volume of the fibres that were laid in this field over its area and the depth laid: what chance and wandering made of the
+    /// recipe's solidity. For a section the same as <see cref="Solidity"/>.
+    /// </summary>
+    public required double LaidSolidity { get; init; }
+
     /// <summary>The share of the field that fibres cover, seen from above; dimensionless.</summary>
     public required double Cover { get; init; }
 

@@ -18,6 +18,9 @@ public sealed record ImageGroup
     /// <summary>The length of the scale bar to be found in the information strip; null when there is none to look for.</summary>
     public Length? ScaleBar { get; init; }
 
+    /// <summary>How these micrographs were made; null when as the layer's others.</summary>
+    public Imaging.ImagingMode? Imaging { get; init; }
+
     /// <summary>The line of the swatch file, from 1; 0 when the group comes from elsewhere.</summary>
     public int Line { get; init; }
 }

@@ -97,10 +97,10 @@ internal static class LayerReader
 
     private static void CheckForecast(MapReader map, SwatchLayer layer)
     {
-        var byImage = layer.Imaging is Imaging.ImagingMode.CrossSection;
-        if (!map.Has("basis_weight") && !map.Has("solidity") && !byImage)
+        var byImage = layer.Imaging is not Imaging.ImagingMode.SecondaryElectron || layer.Images.Any(g => g.Imaging is not (null or Imaging.ImagingMode.SecondaryElectron));
+        if (!map.Has("basis_weight") && !map.Has("solidity") && !map.Has("thickness") && !byImage)
         {
-            map.Complain("images", "a forecast (face_velocity) needs the layer's solidity: add basis_weight with thickness and polymer, or solidity with thickness; or delete face_velocity to measure diameters only");
+            map.Complain("images", "a forecast (face_velocity) needs the layer's solidity: add basis_weight with thickness and polymer, solidity with thickness, or cross-section images with thickness; or delete face_velocity to measure diameters only");
         }
         else if (!map.Has("thickness") && !map.Has("basis_weight"))
         {
@@ -144,9 +144,11 @@ internal static class LayerReader
 
         var pixelSize = map.Positive("pixel_size", Kinds.Length);
         var scaleBar = map.Positive("scale_bar", Kinds.Length);
+        var imaging = map.Choice("imaging", Words.ImagingModes);
         map.RejectUnknownKeys();
         return new ImageGroup
         {
+            Imaging = imaging,
             Patterns = [.. patterns.OfType<YamlScalarNode>().Select(p => p.Value!)],
             PixelSize = pixelSize,
             ScaleBar = scaleBar?.Value,

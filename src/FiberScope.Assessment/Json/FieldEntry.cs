@@ -31,6 +31,8 @@ internal sealed record FieldEntry
 
     public required double BlurPx { get; init; }
 
+    public required double? FibreShare { get; init; }
+
     public required string Algorithm { get; init; }
 
     public required ReadingEntry[] Readings { get; init; }
@@ -64,6 +66,7 @@ internal sealed record FieldEntry
             Fitness = new FitnessEntry(measurement.Fitness.IsFit, measurement.Fitness.Checks),
             DetectionLimitUm = measurement.DetectionLimitPixels * pixel,
             BlurPx = measurement.BlurPixels,
+            FibreShare = measurement.FibreShare,
             Algorithm = measurement.Algorithm,
             Readings = [.. measurement.Readings.Select(r => new ReadingEntry(r.X, r.Y, r.Diameter * pixel, r.StandardUncertainty * pixel, r.RepresentedLength * pixel, r.Trace, r.Direction * 180 / Math.PI))],
             Rejected = measurement.Rejected,

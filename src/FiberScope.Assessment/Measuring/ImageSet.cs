@@ -6,7 +6,7 @@ namespace FiberScope.Assessment.Measuring;
 
 /// <summary>The images of one layer, with how they were made.</summary>
 /// <param name="Layer">The layer's name; empty for the only layer.</param>
-/// <param name="Imaging">How the micrographs were made.</param>
+/// <param name="Imaging">How the micrographs were made, where their group does not say otherwise.</param>
 /// <param name="Groups">The image groups; at least one.</param>
 /// <param name="Folder">The folder that relative paths start from.</param>
 /// <param name="File">The file that names the images, for messages.</param>

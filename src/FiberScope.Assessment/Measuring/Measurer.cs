@@ -32,7 +32,7 @@ public sealed class Measurer(MeasuringSettings settings)
                 steps.Done("measured " + waiting[i].Name);
             },
             cancellation);
-        return [.. sets.Select((_, set) => waiting.Zip(fields).Where(p => p.First.Set == set).Select(p => p.Second).ToImmutableArray())];
+        return [.. sets.Select((_, set) => DiameterSource.Choose(waiting.Zip(fields).Where(p => p.First.Set == set).Select(p => p.Second)))];
     }
 
     private static List<WantedFile> Find(IReadOnlyList<ImageSet> sets)
@@ -70,7 +70,7 @@ public sealed class Measurer(MeasuringSettings settings)
             {
                 try
                 {
-                    pages[i] = Pages(files[i], sets[files[i].Set].Imaging);
+                    pages[i] = Pages(files[i], files[i].Group.Imaging ?? sets[files[i].Set].Imaging);
                     steps.Done("read " + files[i].Image.Name);
                 }
                 catch (ImageRejectedException e)

@@ -5,7 +5,7 @@ using FiberScope.Statistics;
 
 namespace FiberScope.Assessment.Measuring;
 
-/// <summary>The routes to a layer's solidity that its swatch file opens.</summary>
+/// <summary>The routes to a layer's solidity that its swatch file and its pictures open.</summary>
 public static class SolidityRoutes
 {
     /// <summary>The relative standard uncertainty of a basis weight that came without one. Common practice, no source.</summary>
@@ -18,7 +18,16 @@ public static class SolidityRoutes
     public const double StatedUncertainty = 0.05;
 
     /// <summary>Every route at hand; empty when there is none.</summary>
-    public static ImmutableArray<SolidityEstimate> Of(SwatchLayer layer)
+    /// <param name="layer">What was told of the layer.</param>
+    /// <param name="fields">Its fields.</param>
+    /// <param name="survey">Its diameters.</param>
+    public static ImmutableArray<SolidityEstimate> Of(SwatchLayer layer, IReadOnlyList<FieldFinding> fields, DiameterSurvey survey)
+    {
+        ImmutableArray<SolidityEstimate> routes = [.. Told(layer), .. ImageRoutes.Of(fields, layer.Thickness, survey)];
+        return routes.IsEmpty && layer.Thickness is not null ? [ImageRoutes.Unmeasured()] : routes;
+    }
+
+    private static ImmutableArray<SolidityEstimate> Told(SwatchLayer layer)
     {
         var routes = ImmutableArray.CreateBuilder<SolidityEstimate>();
         if (layer is { BasisWeight: { } weight, Thickness: { } thickness, Material: { } material })

@@ -10,7 +10,9 @@ internal static class LayerMedia
     public static MediaLayer Of(LayerFinding layer)
     {
         var solidity = layer.Solidity!.Combined;
-        var byWeighing = layer.Solidity.Routes is [{ Route: SolidityRoute.Weighing }];
+
+        // Weighing and coverage tell fibre per area; the solidity that follows moves against the thickness.
+        var byWeighing = layer.Solidity.Routes.All(r => r.Route is SolidityRoute.Weighing or SolidityRoute.Coverage);
         var relative = solidity.StandardUncertainty / solidity.Value.Fraction;
         return new MediaLayer
         {

@@ -67,12 +67,12 @@ internal static class MeasureCommand
         if (json == "-")
         {
             batch.Publish();
-            JsonDocuments.Measurement(run.Fields, run.Survey, null, run.Caveats, console.Output);
+            JsonDocuments.Measurement(run.Fields, run.Survey, run.Solidity, run.Caveats, console.Output);
             console.Output.Flush();
             return;
         }
 
-        batch.Add(json, stream => JsonDocuments.Measurement(run.Fields, run.Survey, null, run.Caveats, stream));
+        batch.Add(json, stream => JsonDocuments.Measurement(run.Fields, run.Survey, run.Solidity, run.Caveats, stream));
         cancellation.ThrowIfCancellationRequested();
         batch.Publish();
         console.Out.WriteLine(FormattableString.Invariant($"{run.Survey.Readings.Length} readings on {run.Survey.FibreCount} fibres in {run.Survey.FieldCount} fields: length-weighted mean {run.Survey.LengthWeighted.Mean.Micrometers:G4} µm ({run.Survey.MeanInterval95.Low.Micrometers:G4} to {run.Survey.MeanInterval95.High.Micrometers:G4} µm, 95 %)."));

@@ -1,3 +1,4 @@
+using FiberScope.Imaging.Masks;
 using OpenCvSharp;
 
 namespace FiberScope.Imaging.Sections;
@@ -109,26 +110,9 @@ internal sealed class SectionMask : IDisposable
         using var distance = new Mat();
         Cv2.DistanceTransform(cut, distance, DistanceTypes.L2, DistanceTransformMasks.Mask5);
         var radius = Math.Max(3, Cv2.Mean(distance, cut).Val0 * 3);
-        using var fibreLevel = LocalMean(smooth, inner, radius);
-        using var resinLevel = LocalMean(smooth, outer, 4 * radius);
+        using var fibreLevel = LocalLevel.Of(smooth, inner, radius);
+        using var resinLevel = LocalLevel.Of(smooth, outer, 4 * radius);
         Cv2.AddWeighted(fibreLevel, -0.5, resinLevel, -0.5, 0, excess);
         Cv2.Add(excess, smooth, excess);
-    }
-
-    /// <summary>The mean grey of the masked pixels near each place, going over into their overall mean where there are none.</summary>
-    private static Mat LocalMean(Mat smooth, Mat mask, double sigma)
-    {
-        using var weight = new Mat();
-        mask.ConvertTo(weight, MatType.CV_32FC1, 1 / 255.0);
-        using var weighted = new Mat();
-        Cv2.Multiply(smooth, weight, weighted);
-        Cv2.GaussianBlur(weighted, weighted, new Size(0, 0), sigma);
-        Cv2.GaussianBlur(weight, weight, new Size(0, 0), sigma);
-        const double prior = 1e-3;
-        Cv2.Add(weighted, new Scalar(prior * Cv2.Mean(smooth, mask).Val0), weighted);
-        Cv2.Add(weight, new Scalar(prior), weight);
-        var mean = new Mat();
-        Cv2.Divide(weighted, weight, mean);
-        return mean;
     }
 }

@@ -100,9 +100,9 @@ internal static class Wording
     {
         SolidityRoute.Weighing => "by weighing",
         SolidityRoute.CrossSection => "from cross-sections",
-        SolidityRoute.Coverage => "from coverage in transmitted light",
+        SolidityRoute.Coverage => "from the coverage of a thin layer",
         SolidityRoute.PressureDrop => "from a measured pressure drop",
-        SolidityRoute.TopView => "from the top view",
+        SolidityRoute.TopView => "usual for fibre media",
         _ => "as stated",
     };
 

@@ -30,6 +30,7 @@ internal static class ElectronTruth
             Orientation = TrueOrientation.Of(stations.Select(s => ((double)s.Direction, (double)s.Length))),
             MatOrientation = TrueOrientation.Of(laid.Select(l => (l.Direction, l.Length))),
             Solidity = mat.Scale.Recipe.Mat.Solidity,
+            LaidSolidity = LaidLength.Solidity(mat),
             Cover = scene.TopFibre.Count(f => f >= 0) / (double)scene.TopFibre.Length,
             Defects = defects,
             VisibleDepth = Length.FromMeters(deepest.DefaultIfEmpty().Max() * mat.Scale.Recipe.PixelSize.Meters),

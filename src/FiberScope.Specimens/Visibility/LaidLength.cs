@@ -5,6 +5,10 @@ namespace FiberScope.Specimens.Visibility;
 /// <summary>All fibre length that lies in the field, seen or not.</summary>
 internal static class LaidLength
 {
+    /// <summary>Volume of the fibre laid in the field over the field's area and the depth laid.</summary>
+    public static double Solidity(MatModel mat) =>
+        Of(mat).Sum(l => Math.PI / 4 * l.Diameter * l.Diameter * l.Length) / ((double)mat.Scale.Width * mat.Scale.Height * mat.Scale.LaidDepth);
+
     /// <summary>Diameter, length (pixels) and direction (radians) of every stretch between two nodes whose middle lies in the field.</summary>
     public static IEnumerable<(double Diameter, double Length, double Direction)> Of(MatModel mat)
     {

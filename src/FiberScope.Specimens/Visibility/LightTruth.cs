@@ -33,6 +33,7 @@ internal static class LightTruth
             Orientation = TrueOrientation.Of(stations.Select(s => ((double)s.Direction, (double)s.Length))),
             MatOrientation = TrueOrientation.Of(laid.Select(l => (l.Direction, l.Length))),
             Solidity = mat.Scale.Recipe.Mat.Solidity,
+            LaidSolidity = LaidLength.Solidity(mat),
             Cover = scene.TopFibre.Count(f => f >= 0) / (double)scene.TopFibre.Length,
             Defects = [],
             VisibleDepth = Length.FromMeters(mat.Scale.LaidDepth * mat.Scale.Recipe.PixelSize.Meters),

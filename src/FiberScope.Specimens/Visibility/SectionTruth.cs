@@ -26,6 +26,7 @@ internal static class SectionTruth
             Orientation = new TrueOrientation(Angle.FromDegrees(90), cut.Scale.Recipe.Mat.OrientationOrder),
             MatOrientation = new TrueOrientation(Angle.FromDegrees(90), cut.Scale.Recipe.Mat.OrientationOrder),
             Solidity = share,
+            LaidSolidity = share,
             Cover = share,
             Defects = [],
             VisibleDepth = Length.Zero,

@@ -29,7 +29,7 @@ internal sealed class SpecimenCase
     public static SpecimenCase Of(SpecimenRecipe recipe, ulong seed)
     {
         var folder = Repository.Locate(".artifacts", "validation-imaging", "specimens");
-        var path = Path.Combine(folder, FormattableString.Invariant($"{recipe.Name}-{seed}-{Key(recipe, seed)}.bin"));
+        var path = Path.Combine(folder, FormattableString.Invariant($"{recipe.Name}-{seed}-{Key(recipe, seed)}.v2.bin"));
         if (File.Exists(path))
         {
             using var kept = new BinaryReader(File.OpenRead(path));
@@ -64,6 +64,7 @@ internal sealed class SpecimenCase
         Put(file, Truth.Stations.AsSpan());
         Put(file, Truth.Sections.AsSpan());
         file.Write(Truth.Solidity);
+        file.Write(Truth.LaidSolidity);
         file.Write(Truth.Cover);
         file.Write(Truth.Defects.Length);
         foreach (var defect in Truth.Defects)
@@ -78,7 +79,7 @@ internal sealed class SpecimenCase
     {
         var (pixels, mask) = (Take<byte>(file), Take<byte>(file));
         var (stations, sections) = (Take<TrueStation>(file), Take<TrueSection>(file));
-        var (solidity, cover) = (file.ReadDouble(), file.ReadDouble());
+        var (solidity, laid, cover) = (file.ReadDouble(), file.ReadDouble(), file.ReadDouble());
         var defects = new TrueDefect[file.ReadInt32()];
         for (var i = 0; i < defects.Length; i++)
         {
@@ -100,6 +101,7 @@ internal sealed class SpecimenCase
             Orientation = turned,
             MatOrientation = turned,
             Solidity = solidity,
+            LaidSolidity = laid,
             Cover = cover,
             Defects = [.. defects],
             VisibleDepth = UnitsNet.Length.Zero,
