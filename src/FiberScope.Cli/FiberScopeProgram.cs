@@ -31,6 +31,7 @@ public static class FiberScopeProgram
             PredictCommand.Build(console),
             DesignCommand.Build(console),
             CalibrateCommand.Build(console),
+            AuditCommand.Build(console),
             SpecimenCommand.Build(console),
         };
         var parsed = root.Parse(arguments);

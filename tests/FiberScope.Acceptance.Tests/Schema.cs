@@ -33,7 +33,7 @@ internal static class Schema
     private static Dictionary<string, JsonSchema> Load()
     {
         var found = new Dictionary<string, JsonSchema>(StringComparer.Ordinal);
-        foreach (var name in new[] { "measurement-1", "prediction-1", "assessment-1", "design-1", "calibration-1" })
+        foreach (var name in new[] { "measurement-1", "prediction-1", "assessment-1", "design-1", "calibration-1", "audit-key-1", "audit-1" })
         {
             var schema = JsonSchema.FromText(File.ReadAllText(Repository.PathTo("docs", "schemas", name + ".schema.json")));
             found[name] = schema;

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Assessment.Auditing;
 using FiberScope.Assessment.Calibrating;
 using FiberScope.Assessment.Designing;
 using FiberScope.Fibres;
@@ -36,4 +37,14 @@ public static class JsonDocuments
     /// <param name="finding">What was learnt.</param>
     /// <param name="destination">Where to; left open.</param>
     public static void Calibration(CalibrationFinding finding, Stream destination) => JsonText.Write(destination, CalibrationEntry.Of(finding));
+
+    /// <summary>Writes the key of an audit.</summary>
+    /// <param name="key">The key.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void AuditKey(AuditKey key, Stream destination) => JsonText.Write(destination, AuditKeyEntry.Of(key));
+
+    /// <summary>Writes an audit.</summary>
+    /// <param name="finding">The comparison.</param>
+    /// <param name="destination">Where to; left open.</param>
+    public static void Audit(AuditFinding finding, Stream destination) => JsonText.Write(destination, AuditEntry.Of(finding));
 }

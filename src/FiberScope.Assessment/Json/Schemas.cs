@@ -17,4 +17,10 @@ public static class Schemas
 
     /// <summary>What the rolls of a grade taught.</summary>
     public const string Calibration = "fiberscope/calibration/1";
+
+    /// <summary>What an audit's crops show by the machine's reading.</summary>
+    public const string AuditKey = "fiberscope/audit-key/1";
+
+    /// <summary>How the machine agrees with a person's eye.</summary>
+    public const string Audit = "fiberscope/audit/1";
 }

@@ -34,6 +34,9 @@ internal readonly record struct Markup
     /// <summary>A field's picture, which writes its own SVG.</summary>
     public static Markup OfPicture(Imaging.FieldMeasurement field, Pictures.PictureBudget budget) => new(Pictures.FieldPicture.Svg(field, budget));
 
+    /// <summary>A PNG picture that travels inside the page.</summary>
+    public static Markup OfPng(byte[] png, string description) => Of($"<img alt=\"{description}\" src=\"data:image/png;base64,{Convert.ToBase64String(png)}\">");
+
     /// <summary>Pieces one after the other.</summary>
     public static Markup Join(IEnumerable<Markup> pieces) => new(string.Concat(pieces.Select(p => p._html)));
 
