@@ -8,7 +8,9 @@ namespace FiberScope.Assessment.Predicting;
 /// <summary>From layers to what a rig would show.</summary>
 public static class Predictor
 {
-    private static readonly double[] VelocityFactors = [0.2, 0.35, 0.5, 0.7, 1, 1.4, 2, 3, 5];
+    /// <summary>Face velocities of a sweep over that of use: even in the logarithm, with that of use in the middle.</summary>
+    private static readonly double[] VelocityFactors = [.. Enumerable.Range(-7, 15).Select(i => Math.Pow(5, i / 7.0))];
+
     private static readonly double[] PermeabilityTests = [125, 200];
 
     /// <summary>The forecast at the operating point.</summary>

@@ -26,7 +26,7 @@ internal static class PredictionSummary
 
         foreach (var b in prediction.Bands)
         {
-            yield return FormattableString.Invariant($"{b.From.Micrometers:G3} to {b.To.Micrometers:G3} µm: {ForecastText.Percent(b.Result.Penetration)} passes ({Bands(b.Result)}), efficiency {ForecastText.Percent(1 - b.Result.Penetration)}");
+            yield return FormattableString.Invariant($"{b.From.Micrometers:G3} to {b.To.Micrometers:G3} µm: {ForecastText.Percent(b.Result.Penetration)} passes ({Bands(b.Result)})");
         }
 
         yield return Leak(prediction);

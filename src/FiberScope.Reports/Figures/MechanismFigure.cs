@@ -1,5 +1,7 @@
 using FiberScope.Filtration;
 using FiberScope.Reports.Html;
+using FiberScope.Statistics;
+using OxyPlot;
 
 namespace FiberScope.Reports.Figures;
 
@@ -25,6 +27,8 @@ internal static class MechanismFigure
         string[] mechanisms = [.. curve.SelectMany(p => p.ByMechanism.Where(m => m.Value >= LeastShare).Select(m => m.Key)).Distinct(StringComparer.Ordinal).Order(StringComparer.Ordinal)];
         var axis = PenetrationAxis.For(curve.Select(p => p.Penetration * 100).Append(100));
         var model = FigureStyle.Plot(PenetrationFigure.ParticleAxis(curve), axis.Drawn("penetration (%)"));
+        Band(model, "spread of the models", curve.Select(p => (p, (Interval?)p.ModelBand)), axis, FigureStyle.Slate, 30);
+        Band(model, "measured inputs, 95 %", curve.Select(p => (p, p.MeasurementBand)), axis, FigureStyle.Series[0], 60);
         model.Series.Add(FigureStyle.Line("all together", curve.Select(p => (p.Particle.Micrometers, axis.Clip(p.Penetration * 100))), FigureStyle.Ink, 3));
         foreach (var (mechanism, i) in mechanisms.Select((m, i) => (m, i)))
         {
@@ -34,5 +38,14 @@ internal static class MechanismFigure
         }
 
         return SvgFigure.Draw(model, "mechanisms", "Penetration that each mechanism alone would give, against particle size.", height: 390);
+    }
+
+    private static void Band(PlotModel model, string title, IEnumerable<(CurvePoint Point, Interval? Band)> curve, PenetrationAxis axis, OxyColor colour, byte opacity)
+    {
+        (double, double, double)[] known = [.. curve.Where(c => c.Band is not null).Select(c => (c.Point.Particle.Micrometers, axis.Clip(100 * c.Band!.Value.Low), axis.Clip(100 * c.Band.Value.High)))];
+        if (known.Length > 1)
+        {
+            model.Series.Add(FigureStyle.Band(title, known, colour, opacity, LineStyle.None));
+        }
     }
 }

@@ -46,6 +46,11 @@ internal static class Wording
     /// <summary>A share as a percentage: <c>2.35 %</c>.</summary>
     public static string Percent(double share, int digits = 3) => $"{PerHundred(share, digits)} %";
 
+    /// <summary>The efficiency beside a penetration, with as many nines as it takes: <c>99.9986 %</c>.</summary>
+    public static string Efficiency(double penetration) => penetration < 1e-8
+        ? "above 99.999999 %"
+        : $"{Fixed(100 * (1 - penetration), Math.Clamp((int)Math.Ceiling(-Math.Log10(100 * penetration)) + 1, 1, 8))} %";
+
     /// <summary>A range of shares as percentages.</summary>
     public static string Percent(Interval shares, int digits = 3) => $"{PerHundred(shares.Low, digits)} to {PerHundred(shares.High, digits)} %";
 

@@ -36,8 +36,9 @@ internal sealed class ForecastSection : IReportSection
             {SensitivityPart.Render(forecast)}
             {Permeability(assessment)}
             {Rig(assessment)}
+            {ChallengePart.Render(assessment)}
             {ClassPart.Render(assessment.Classes)}
-            {LeakPart.Render(forecast)}
+            {LeakPart.Render(forecast, assessment.TotalInwardLeakage)}
             {Curve(forecast)}
             """);
     }
@@ -72,7 +73,7 @@ internal sealed class ForecastSection : IReportSection
             .Row("pressure drop", Wording.Of(forecast.PressureDrop), Range(open?.PressureDropPascals, 1, "Pa"), Range(forecast.PressureDropModelBandPascals, 1, "Pa"))
             .Row("most-penetrating particle size (MPPS)", forecast.MostPenetratingSize is { } size ? Wording.Particle(size) : "none between 10 nm and 2 µm", Sizes(open?.MostPenetratingSize), Sizes(forecast.MostPenetratingSizeModelBand))
             .Row("penetration at the MPPS", Wording.Percent(forecast.PenetrationAtMostPenetratingSize), Range(open?.PenetrationAtMostPenetratingSize ?? worst.MeasurementBand, 100, "%"), Range(forecast.PenetrationAtMostPenetratingSizeModelBand ?? worst.ModelBand, 100, "%"))
-            .Row("efficiency at the MPPS", Wording.Percent(1 - forecast.PenetrationAtMostPenetratingSize, 4), "", "")
+            .Row("efficiency at the MPPS", Wording.Efficiency(forecast.PenetrationAtMostPenetratingSize), "", "")
             .Row("quality factor at the MPPS", $"{Wording.Number(forecast.QualityFactorPerPascal * 1000)} /kPa", Range(open?.QualityFactorPerPascal, 1000, "/kPa"), "")
             .Finish();
     }
