@@ -40,7 +40,7 @@ public static class FieldMeter
         var readings = ImmutableArray.CreateBuilder<PixelReading>();
         var (corrections, priors) = WidthCorrection.Of(ribbons, picture.GreyNoise);
         var blur = ribbons.Count == 0 ? 0 : priors.Blur;
-        var detection = SelectionStage.Curve(micrograph, picture, ribbons, corrections, blur, tracing, cancellation);
+        var detection = DetectionCurve.Of(picture.GreyNoise);
         foreach (var (ribbon, correction) in ribbons.Zip(corrections))
         {
             readings.AddRange(RibbonReadings.Of(ribbon, correction, detection, traces.Count));
