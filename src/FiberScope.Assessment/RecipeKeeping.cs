@@ -31,6 +31,7 @@ internal static class RecipeKeeping
         yield return Entry("unfit fields", m.IncludeUnfit ? "counted" : "left out", m.IncludeUnfit == standard.IncludeUnfit);
         yield return Entry("pixel size, relative standard uncertainty unless told", Number(m.ScaleUncertainty), m.ScaleUncertainty == standard.ScaleUncertainty);
         yield return Entry("edge, common standard uncertainty in pixels", Number(m.EdgeUncertainty), m.EdgeUncertainty == standard.EdgeUncertainty);
+        yield return Entry("selection of fibres, relative standard uncertainty", Number(m.SelectionUncertainty), m.SelectionUncertainty == standard.SelectionUncertainty);
         yield return Entry("bootstrap draws", Number(m.BootstrapDraws), m.BootstrapDraws == standard.BootstrapDraws);
         yield return Entry("seed", Number(m.Seed), m.Seed == standard.Seed);
         yield return Entry("basis weight, relative standard uncertainty unless told", Number(SolidityRoutes.BasisWeightUncertainty), isDefault: true);

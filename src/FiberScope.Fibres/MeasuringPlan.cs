@@ -17,7 +17,7 @@ internal static class MeasuringPlan
 
         double Square(string name) => survey.Budget.Parts.Where(p => p.Name == name).Sum(p => p.StandardUncertainty.Meters * p.StandardUncertainty.Meters);
         var wanted = relativeHalfWidth * survey.LengthWeighted.Mean.Meters;
-        var lasting = Square("scale") + Square("edge");
+        var lasting = Square("scale") + Square("edge") + Square("selection");
         var oneField = (Square("fibres") + Square("fields")) * survey.FieldCount;
         for (var fields = 2; fields <= MostFields; fields++)
         {

@@ -86,6 +86,7 @@ internal sealed class SurveyCalculation
         [
             new("scale", Length.FromMeters(byFibre.Mean * _settings.ScaleRelativeUncertainty), double.PositiveInfinity, "The pixel size, the same for every reading."),
             new("edge", _settings.EdgeUncertainty, double.PositiveInfinity, "Where the edge of a fibre is, what remains in common after the correction."),
+            new("selection", Length.FromMeters(byFibre.Mean * _settings.SelectionRelativeUncertainty), double.PositiveInfinity, "Which fibres can be read: thin, dim and crossed ones less often; what remains after weighting."),
             new("fibres", Length.FromMeters(byFibre.StandardError), Math.Max(1, byFibre.DegreesOfFreedom), "Fibre-to-fibre spread: other fibres of the same fields would have given another mean."),
             new("fields", Length.FromMeters(Math.Sqrt(Math.Max(0, fields - fibres))), Math.Max(1, byField.DegreesOfFreedom), "Field-to-field spread beyond what the fibres explain."),
             .. bySwatch.Clusters == 1 ? (BudgetPart[])[] :
@@ -105,7 +106,8 @@ internal sealed class SurveyCalculation
         var byField = ClusteredMean.Of(diameters, ones, [.. _means.Select(m => m.Key.Field)]);
         var sampling = Math.Max(byFibre.StandardError, byField.StandardError);
         var freedom = byField.StandardError > byFibre.StandardError ? byField.DegreesOfFreedom : byFibre.DegreesOfFreedom;
-        var fixedPart = Math.Pow(byFibre.Mean * _settings.ScaleRelativeUncertainty, 2) + Math.Pow(_settings.EdgeUncertainty.Meters, 2);
+        var relative = Math.Pow(_settings.ScaleRelativeUncertainty, 2) + Math.Pow(_settings.SelectionRelativeUncertainty, 2);
+        var fixedPart = (byFibre.Mean * byFibre.Mean * relative) + Math.Pow(_settings.EdgeUncertainty.Meters, 2);
         var t = ClusteredMean.StudentFactor95(Math.Max(1, freedom));
         return Math.Sqrt((t * t * sampling * sampling) + (1.96 * 1.96 * fixedPart));
     }
@@ -118,11 +120,18 @@ internal sealed class SurveyCalculation
         return figures;
     }
 
-    /// <summary>The number of equally long independent fibres that would tell as much (Kish on the length of each fibre).</summary>
+    /// <summary>The number of equally long independent fibres that would tell as much.</summary>
+    /// <remarks>
+    /// By the length of each traced stretch (Kish 1965, Survey Sampling), and no more than the spread of the mean between fields allows,
+    /// (SD / standard error)²: one fibre seen in several stretches, or alike fibres lying together, count as one.
+    /// </remarks>
     private double EffectiveFibres()
     {
         var total = _means.Sum(m => m.Length);
-        return total * total / _means.Sum(m => m.Length * m.Length);
+        var stretches = total * total / _means.Sum(m => m.Length * m.Length);
+        var byField = ClusteredMean.Of(_diameters, _lengths, _fields).StandardError;
+        var spread = new WeightedSample(_diameters, _lengths).StandardDeviation;
+        return byField > 0 ? Math.Max(1, Math.Min(stretches, spread * spread / (byField * byField))) : stretches;
     }
 
     private ImmutableArray<Caveat> Caveats()

@@ -15,6 +15,12 @@ public sealed record SurveySettings
     /// </summary>
     public Length EdgeUncertainty { get; init => field = Length.FromMeters(Require.NotNegative(value.Meters)); } = Length.Zero;
 
+    /// <summary>
+    /// The relative standard uncertainty of the mean from which fibres get read at all, what remains after weighting; dimensionless,
+    /// 0 to 0.5. Default zero: tell it.
+    /// </summary>
+    public double SelectionRelativeUncertainty { get; init => field = Require.Within(value, 0, 0.5); }
+
     /// <summary>How many bootstrap draws the intervals of SD and percentiles rest on; 100 to 100,000. Default 1,000.</summary>
     public int BootstrapReplicates { get; init => field = (int)Require.Within(value, 100, 100_000); } = 1000;
 

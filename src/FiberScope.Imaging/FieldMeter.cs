@@ -13,7 +13,7 @@ namespace FiberScope.Imaging;
 public static class FieldMeter
 {
     /// <summary>Name and version of the algorithm.</summary>
-    public const string Algorithm = "paired-edges@2";
+    public const string Algorithm = "paired-edges@3";
 
     /// <summary>Measures the fibres of a micrograph.</summary>
     /// <param name="micrograph">The picture.</param>

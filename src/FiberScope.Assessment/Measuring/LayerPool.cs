@@ -28,7 +28,7 @@ public sealed record LayerPool(DiameterSurvey Survey, ImmutableArray<Caveat> Cav
         }
 
         var caveats = ImmutableArray.CreateBuilder<Caveat>();
-        caveats.AddRange(fields.Where(f => !f.IsIncluded).Select(f => new Caveat("field-left-out", $"{f.Name} is left out: {f.LeftOutBecause}.")));
+        caveats.AddRange(fields.Where(f => !f.IsIncluded).Select(f => new Caveat("field-left-out", $"{f.Name} is left out: {f.LeftOutBecause!.TrimEnd('.')}.")));
         caveats.AddRange(Twins(included));
         var pooled = Pool(included, caveats);
         var pixel = included.Average(f => f.Measurement.Micrograph.PixelSize.Meters);
@@ -36,6 +36,7 @@ public sealed record LayerPool(DiameterSurvey Survey, ImmutableArray<Caveat> Cav
         {
             ScaleRelativeUncertainty = included.Max(f => f.PixelSizeUncertainty),
             EdgeUncertainty = Length.FromMeters(settings.EdgeUncertainty * pixel),
+            SelectionRelativeUncertainty = settings.SelectionUncertainty,
             BootstrapReplicates = settings.BootstrapDraws,
             Seed = settings.Seed,
         });

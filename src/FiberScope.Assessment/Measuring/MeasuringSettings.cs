@@ -19,6 +19,12 @@ public sealed record MeasuringSettings
     /// <summary>What the edge finding leaves in common in every diameter, as a standard uncertainty in pixels; 0 to 2. Default 0.1.</summary>
     public double EdgeUncertainty { get; init => field = Require.Within(value, 0, 2); } = 0.1;
 
+    /// <summary>
+    /// What the choice of readable fibres leaves open in the mean after weighting, as a relative standard uncertainty; 0 to 0.5. Default
+    /// 0.02, about what virtual specimens with known truth show (docs/validation.md, selection).
+    /// </summary>
+    public double SelectionUncertainty { get; init => field = Require.Within(value, 0, 0.5); } = 0.02;
+
     /// <summary>Bootstrap draws behind the intervals of SD and percentiles; 100 to 100,000. Default 1,000.</summary>
     public int BootstrapDraws { get; init => field = (int)Require.Within(value, 100, 100_000); } = 1000;
 

@@ -18,6 +18,9 @@ internal sealed record CoverageFigures(int Swatches, int FieldsEach, double Cove
 /// <summary>Makes the swatches and counts.</summary>
 internal static class CoverageRun
 {
+    // The program's own defaults; the pixel size is known here.
+    private const double EdgePixels = 0.1, Selection = 0.02;
+
     public static SpecimenRecipe Recipe { get; } = Small(SpecimenFamilies.Find("electrospun")!);
 
     public static CoverageFigures Run(int swatches, int fieldsEach, bool reporting)
@@ -39,7 +42,7 @@ internal static class CoverageRun
 
             if (readings.Count > 0)
             {
-                surveys.Add(DiameterSurvey.From(readings, new SurveySettings { ScaleRelativeUncertainty = 0, BootstrapReplicates = 200 }));
+                surveys.Add(DiameterSurvey.From(readings, new SurveySettings { ScaleRelativeUncertainty = 0, EdgeUncertainty = Metres(EdgePixels * pixel), SelectionRelativeUncertainty = Selection, BootstrapReplicates = 200 }));
             }
         }
 
