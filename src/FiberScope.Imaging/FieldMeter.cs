@@ -41,9 +41,10 @@ public static class FieldMeter
         var (corrections, priors) = WidthCorrection.Of(ribbons, picture.GreyNoise);
         var blur = ribbons.Count == 0 ? 0 : priors.Blur;
         var detection = DetectionCurve.Of(picture.GreyNoise);
+        var shares = StretchShares.Of(ribbons);
         foreach (var (ribbon, correction) in ribbons.Zip(corrections))
         {
-            readings.AddRange(RibbonReadings.Of(ribbon, correction, detection, traces.Count));
+            readings.AddRange(RibbonReadings.Of(ribbon, correction, detection, shares[traces.Count], traces.Count));
             traces.Add(new Trace(traces.Count, CentreLine(ribbon)));
         }
 

@@ -39,7 +39,7 @@ internal sealed class RibbonProfile
 
         // Rows are laid on the fibre's smooth course: laid on their own noisy edges they would fake a sharper edge at the wrong place.
         double[] middles = [.. Enumerable.Range(0, strip.Rows).Select(r => 0.5 * (strip.Right.Offset[r] - strip.Left.Offset[r]))];
-        var centre = Runs.Median(middles, ribbon.Accepted, 4 * width / strip.Step);
+        var centre = Runs.Median(middles, ribbon.Accepted, 12 * width / strip.Step);
         var offsets = Places(width);
         var grey = new double[offsets.Length];
         var stride = Math.Max(1, rows.Length / MostRows);

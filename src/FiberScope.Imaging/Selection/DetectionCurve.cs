@@ -19,7 +19,7 @@ internal sealed record DetectionCurve(double HalfWay)
     private const double Power = 1.75;
 
     /// <summary>w₀ in pixels over the noise's share of the picture's range from black to white.</summary>
-    private const double PixelsPerNoise = 40;
+    private const double PixelsPerNoise = 20;
 
     /// <summary>The brightness at which the noise counts: fibres below the topmost, which are the ones that are missed.</summary>
     private const double Brightness = 0.3;

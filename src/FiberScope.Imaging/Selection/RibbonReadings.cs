@@ -11,7 +11,8 @@ internal static class RibbonReadings
 
     private const double LeastSpacing = 2;
 
-    public static IEnumerable<PixelReading> Of(Ribbon ribbon, Correction correction, DetectionCurve detection, int trace)
+    /// <summary>The readings of a stretch; <paramref name="share"/> is what a length of it counts for, see <see cref="StretchShares"/>.</summary>
+    public static IEnumerable<PixelReading> Of(Ribbon ribbon, Correction correction, DetectionCurve detection, double share, int trace)
     {
         var strip = ribbon.Strip;
         var rows = Math.Max(1, (int)Math.Round(Math.Max(LeastSpacing, SpacingShare * ribbon.Width) / strip.Step));
@@ -28,7 +29,7 @@ internal static class RibbonReadings
             var direction = Math.Atan2(strip.Nx[middle], -strip.Ny[middle]);
             direction -= Math.PI * Math.Floor(direction / Math.PI);
             yield return new PixelReading(
-                strip.X[middle] + 0.5, strip.Y[middle] + 0.5, direction, width, correction.Uncertainty, accepted.Length * strip.Step / detection.Share(width), trace);
+                strip.X[middle] + 0.5, strip.Y[middle] + 0.5, direction, width, correction.Uncertainty, share * accepted.Length * strip.Step / detection.Share(width), trace);
         }
     }
 }
