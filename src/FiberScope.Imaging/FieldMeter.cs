@@ -6,6 +6,7 @@ using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Sections;
 using FiberScope.Imaging.Selection;
 using FiberScope.Imaging.Tracing;
+using FiberScope.Imaging.Transmitted;
 
 namespace FiberScope.Imaging;
 
@@ -25,6 +26,11 @@ public static class FieldMeter
         if (micrograph.Mode == ImagingMode.CrossSection)
         {
             return SectionMeter.Measure(micrograph, settings, cancellation);
+        }
+
+        if (micrograph.Mode == ImagingMode.Transmitted)
+        {
+            return LightMeter.Measure(micrograph, settings, cancellation);
         }
 
         var tracing = settings.Tracing;
@@ -69,7 +75,7 @@ public static class FieldMeter
             Defects = defects,
             DetectionLimitPixels = Math.Max(2.5, 2 * blur),
             BlurPixels = blur,
-            FibreShare = micrograph.Mode == ImagingMode.SecondaryElectron ? GroundCoverage.Of(micrograph, readings, settings.Coverage) : null,
+            FibreShare = GroundCoverage.Of(micrograph, readings, settings.Coverage),
             Algorithm = Algorithm,
         };
     }

@@ -3,6 +3,7 @@ using FiberScope.Imaging.Defects;
 using FiberScope.Imaging.Fitness;
 using FiberScope.Imaging.Sections;
 using FiberScope.Imaging.Tracing;
+using FiberScope.Imaging.Transmitted;
 
 namespace FiberScope.Imaging;
 
@@ -20,6 +21,9 @@ public sealed record MeasurementSettings
 
     /// <summary>How cut fibres are read in a section.</summary>
     public SectionSettings Sections { get; init; } = new();
+
+    /// <summary>How fibres are read in transmitted light.</summary>
+    public TransmittedSettings Transmitted { get; init; } = new();
 
     /// <summary>When and how the share of a field that fibres cover is told.</summary>
     public CoverageSettings Coverage { get; init; } = new();
