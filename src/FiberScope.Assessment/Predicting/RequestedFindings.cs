@@ -10,9 +10,6 @@ internal sealed class RequestedFindings(IReadOnlyList<MediaLayer> layers, Operat
     /// <summary>Draws behind the band of one aerosol or size band; fewer than the curve's, for there may be many.</summary>
     private const int AskedDraws = 500;
 
-    /// <summary>Draws behind the standard deviation of one class's test, of which there are about twenty.</summary>
-    private const int ClassDraws = 200;
-
     private readonly ForecastSettings _asked = settings with { Draws = Math.Min(settings.Draws, AskedDraws) };
 
     public ImmutableArray<ChallengeFinding> Challenges() => [.. request.Challenges.Select(Challenge)];
@@ -20,7 +17,7 @@ internal sealed class RequestedFindings(IReadOnlyList<MediaLayer> layers, Operat
     public ImmutableArray<BandFinding> Bands() =>
         [.. request.Bands.Select(b => new BandFinding(b.From, b.To, Filtration.Challenge.OverBand(layers, operation, b.From, b.To, _asked)))];
 
-    public ImmutableArray<ClassForecast> Classes() => MediaClasses.Judge(layers, operation, settings with { Draws = Math.Min(settings.Draws, ClassDraws) }, request.MediaArea);
+    public ImmutableArray<ClassForecast> Classes() => MediaClasses.Judge(layers, operation, settings, request.MediaArea);
 
     /// <summary>What a penetration of the medium becomes with the mask's leaks beside it. An edge leak is in the penetration already.</summary>
     public double? TotalInward(double penetration) => request.Mask is { } mask
