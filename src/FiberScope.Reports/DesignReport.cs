@@ -39,14 +39,25 @@ public static class DesignReport
             <p class="kind">Media design</p>
             <h1>{title}</h1>
             <p>At a face velocity of {Wording.Of(point.FaceVelocity)}, by the correlations <code>{Words.Of(Words.Correlations, finding.Correlations)}</code>. {(finding.IsMet ? "The best structure that meets every target:" : "No structure in the ranges meets every target; the nearest miss:")}</p>
-            {Keys(finding)}
-            {Targets(finding)}
+            {Keys(finding, finding.Candidates[0])}
+            {Targets(finding, finding.Candidates[0], "best structure")}
+            {Surer(finding)}
+            <p class="fine">Probability: the published models counted as equally likely, each with the uncertainties of the starting medium where the file tells any. Weight and thickness are chosen, not forecast.</p>
             """);
     }
 
-    private static Markup Keys(DesignFinding finding)
+    private static Markup Surer(DesignFinding finding) => finding.Surer is { } surer
+        ? Markup.Of(
+            $"""
+            <h3>A surer choice</h3>
+            <p>The best structure just meets its targets by the central forecast. This one keeps them even where the models and the uncertain inputs are against it:</p>
+            {Keys(finding, surer)}
+            {Targets(finding, surer, "surer choice")}
+            """)
+        : Markup.Empty;
+
+    private static Markup Keys(DesignFinding finding, DesignCandidate best)
     {
-        var best = finding.Candidates[0];
         var keys = finding.Design.Variables.Zip(best.Values, (v, value) => Key(DesignMaps.Name(finding, v), Told(v, value), Ends(v, value)));
         return Markup.Of($"<div class=\"keys\">{keys}</div>");
     }
@@ -62,10 +73,10 @@ public static class DesignReport
         return $"from {Told(v, v.Range.Low)} to {Told(v, v.Range.High)}{at}";
     }
 
-    private static Markup Targets(DesignFinding finding)
+    private static Markup Targets(DesignFinding finding, DesignCandidate best, string heading)
     {
-        var (best, targets) = (finding.Candidates[0], finding.Design.Targets);
-        var table = new Table("figures", "target", "at most", "best structure", "probability that it is met");
+        var targets = finding.Design.Targets;
+        var table = new Table("figures", "target", "at most", heading, "probability that it is met");
         void Row(string name, string? limit, string value, string? key)
         {
             if (limit is not null)
@@ -79,7 +90,7 @@ public static class DesignReport
         Row("pressure drop", targets.PressureDrop is { } drop ? Wording.Of(drop) : null, Wording.Of(best.PressureDrop), "pressure-drop");
         Row("basis weight", targets.BasisWeight is { } weight ? Wording.Of(weight) : null, $"{Wording.Told(best.BasisWeight.GramsPerSquareMeter, Digits)} g/m²", null);
         Row("thickness", targets.Thickness is { } thickness ? Wording.Thickness(thickness) : null, $"{Wording.Told(best.Thickness.Millimeters, Digits)} mm", null);
-        return Markup.Of($"{table.Finish()}<p class=\"fine\">Probability: the published models counted as equally likely, each with the uncertainties of the starting medium where the file tells any. Weight and thickness are chosen, not forecast.</p>");
+        return table.Finish();
     }
 
     private static Markup Structures(DesignFinding finding)

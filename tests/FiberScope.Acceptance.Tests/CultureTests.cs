@@ -54,6 +54,45 @@ public sealed class CultureTests(SmallFields fields) : IClassFixture<SmallFields
     });
 
     [Theory]
+    [InlineData("de-DE")]
+    [InlineData("fa-IR")]
+    public async Task Designing_says_and_writes_the_same_in_every_language(string language) => await SameAsync(language, async workspace =>
+    {
+        var design = Media[..Media.IndexOf("air:", StringComparison.Ordinal)] + """
+            polymer: pp
+            targets: {penetration_at_mpps: 30.5 %, pressure_drop: 90.5 Pa}
+            vary: [{layer: layer 1, fibre_diameter: 1.5 um to 3.5 um}]
+            """;
+        var run = await CommandRun.OfAsync("design", workspace.Write("design.yaml", design), "--out", workspace.PathTo("out"));
+        return (run, await File.ReadAllTextAsync(workspace.PathTo("out", "design.json"), TestContext.Current.CancellationToken) + await File.ReadAllTextAsync(workspace.PathTo("out", "design.html"), TestContext.Current.CancellationToken));
+    });
+
+    [Theory]
+    [InlineData("de-DE")]
+    [InlineData("fa-IR")]
+    public async Task Calibrating_says_and_writes_the_same_in_every_language(string language) => await SameAsync(language, async workspace =>
+    {
+        var rolls = """
+            grade: Demo
+            face_velocity: 5.3 cm/s
+            rolls: [{layers: [{fibre_diameter: {median: 1.8 um, gsd: 1.6}, solidity: 0.08, thickness: 310.5 um}], measured: [{pressure_drop: 45.5 Pa}, {particle: 0.3 um, penetration: 47.5 %, discharged: yes}]}]
+            """;
+        var run = await CommandRun.OfAsync("calibrate", workspace.Write("rolls.yaml", rolls));
+        return (run, await File.ReadAllTextAsync(workspace.PathTo("rolls.calibration.json"), TestContext.Current.CancellationToken));
+    });
+
+    [Theory]
+    [InlineData("de-DE")]
+    [InlineData("fa-IR")]
+    public async Task Comparing_an_audit_says_and_writes_the_same_in_every_language(string language) => await SameAsync(language, async workspace =>
+    {
+        var crop = (int i, double um) => string.Create(CultureInfo.InvariantCulture, $$"""{"crop": "crop-00{{i}}.png", "um_per_px": 0.025, "layer": "", "image": "a.png", "image_sha256": "{{new string('0', 64)}}", "page": 0, "field": 1, "trace": {{i}}, "x_px": 10.5, "y_px": 20.5, "direction_deg": 30.5, "diameter_um": {{um}}, "u_um": 0.02, "pixel_size_um": 0.1}""");
+        workspace.Write("audit-key.json", $$"""{"schema": "fiberscope/audit-key/1", "software": "", "source": "m.json", "source_sha256": "{{new string('0', 64)}}", "seed": 1, "crops": [{{crop(1, 1.5)}}, {{crop(2, 2.25)}}, {{crop(3, 3.125)}}, {{crop(4, 1.75)}}]}""");
+        var run = await CommandRun.OfAsync("audit", "compare", workspace.Write("by-eye.csv", "crop;um_per_px;diameter_px;diameter_um;note\ncrop-001.png;;;1,45;\ncrop-002.png;;;2,3;\ncrop-003.png;;120,5;;\ncrop-004.png;;;1.8;"));
+        return (run, await File.ReadAllTextAsync(workspace.PathTo("audit.json"), TestContext.Current.CancellationToken) + await File.ReadAllTextAsync(workspace.PathTo("audit.html"), TestContext.Current.CancellationToken));
+    });
+
+    [Theory]
     [MemberData(nameof(Languages))]
     public async Task Complaints_read_the_same_in_every_language(string language) => await SameAsync(language, async workspace =>
     {

@@ -29,6 +29,9 @@ public sealed class DesignTests
             Assert.InRange(Number(c["pressure_drop_pa"]), 0, 90);
             Assert.InRange(Number(c["basis_weight_g_per_m2"]), 10, 60 * (1 + 1e-6));
         });
+        var (best, surer) = (design["candidates"]![0]!, design["surer"]!);
+        Assert.True(surer["meets_targets"]!.GetValue<bool>());
+        Assert.True(Sure(surer) > Sure(best));
         var factors = design["candidates"]!.AsArray().Select(c => Number(c!["quality_factor_per_pa"])).ToArray();
         Assert.Equal(factors.OrderDescending(), factors);
     }
@@ -113,6 +116,9 @@ public sealed class DesignTests
         var start = page.IndexOf("```yaml\n", page.IndexOf("## design.yaml", StringComparison.Ordinal), StringComparison.Ordinal) + 8;
         await DesignedAsync(page[start..page.IndexOf("```", start, StringComparison.Ordinal)]);
     }
+
+    /// <summary>The probability of the target that is least probably met.</summary>
+    private static double Sure(JsonNode candidate) => candidate["probabilities"]!.AsObject().Min(p => Number(p.Value));
 
     private static double Number(JsonNode? node) => node!.GetValue<double>();
 

@@ -17,6 +17,12 @@ public sealed record DesignFinding
     /// <summary>The best structures, best first; where none meets the targets, the nearest misses.</summary>
     public required ImmutableArray<DesignCandidate> Candidates { get; init; }
 
+    /// <summary>
+    /// The best structure that keeps the targets even where the models and the uncertain inputs are against it; null when the best is as
+    /// sure already, or when none of the ranges allows it.
+    /// </summary>
+    public required DesignCandidate? Surer { get; init; }
+
     /// <summary>Two variables over their ranges with the others as in the best structure; null with one variable only.</summary>
     public required DesignMap? Map { get; init; }
 

@@ -14,7 +14,7 @@ public static class Designer
     private const int FewestSteps = 3;
     private const int MostSteps = 24;
     private const int Kept = 5;
-    private const int MapSteps = 29;
+    private const int MapSteps = 25;
 
     /// <summary>Searches, and maps two variables about the best.</summary>
     /// <param name="design">What is asked.</param>
@@ -26,6 +26,8 @@ public static class Designer
         var candidates = Search(Predictor.Calibrated(design.Start.Layers, design.Start.Request), design, settings).Search(steps, Kept);
         cancellation.ThrowIfCancellationRequested();
         var best = candidates[0];
+        var surer = new SurerDesign(design, settings, steps).Find(candidates[0]);
+        cancellation.ThrowIfCancellationRequested();
         DesignMap? map = null;
         if (design.Map is var (across, up))
         {
@@ -40,6 +42,7 @@ public static class Designer
             Design = design,
             Correlations = settings.Correlations,
             Candidates = candidates,
+            Surer = surer,
             Map = map,
             Caveats = [.. calibrated, .. MediaModel.Forecast(best.Layers, design.Start.Operation, settings with { Draws = 0 }).Caveats],
         };

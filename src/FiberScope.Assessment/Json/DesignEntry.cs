@@ -16,6 +16,7 @@ internal sealed record DesignEntry(
     TargetsEntry Targets,
     VariableEntry[] Variables,
     CandidateEntry[] Candidates,
+    CandidateEntry? Surer,
     DesignMapEntry? Map,
     ImmutableArray<Caveat> Warnings,
     ImmutableArray<string> Cautions)
@@ -28,6 +29,7 @@ internal sealed record DesignEntry(
         TargetsEntry.Of(finding.Design),
         [.. finding.Design.Variables.Select(v => VariableEntry.Of(v, finding.Design.Start.Layers))],
         [.. finding.Candidates.Select(c => CandidateEntry.Of(c, finding.Design))],
+        finding.Surer is { } surer ? CandidateEntry.Of(surer, finding.Design) : null,
         finding.Map is { } map ? DesignMapEntry.Of(map, finding.Design.Variables) : null,
         finding.Caveats,
         Assessment.Cautions.All);

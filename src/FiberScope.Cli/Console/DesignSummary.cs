@@ -19,6 +19,17 @@ internal static class DesignSummary
             output.WriteLine("  " + line);
         }
 
+        if (finding.Surer is { } surer)
+        {
+            output.WriteLine("A surer choice:");
+            output.WriteLine("  " + Values(finding, surer));
+            output.WriteLine("  " + Figures(surer));
+            foreach (var line in Targets(finding, surer))
+            {
+                output.WriteLine("  " + line);
+            }
+        }
+
         if (finding.Candidates.Length > 1)
         {
             output.WriteLine(finding.IsMet ? "Next best:" : "Other misses:");

@@ -66,6 +66,9 @@ public sealed class MediaDesign
         return [.. best.Select(b => b.Candidate with { Probabilities = Probabilities(b.Candidate) })];
     }
 
+    /// <summary>A structure found by another search, judged by the targets of this one.</summary>
+    public DesignCandidate Judge(DesignCandidate candidate) => candidate with { MeetsTargets = Miss(candidate) == 0, Probabilities = Probabilities(candidate) };
+
     /// <summary>All combinations of two variables on an even grid, for a map; the other variables stay as the start has them.</summary>
     /// <param name="across">The variable along the map's width.</param>
     /// <param name="up">The variable along its height.</param>

@@ -92,16 +92,16 @@ internal static class LightMeter
 
     private static FieldMeasurement Result(
         Micrograph micrograph, MeasurementSettings settings, IReadOnlyList<Trace> traces, IReadOnlyList<PixelReading> readings, IReadOnlyDictionary<string, int> rejected, double blur, double? coverage) => new()
-    {
-        Micrograph = micrograph,
-        Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = [.. readings], Defects = [] }, settings.Fitness),
-        Traces = [.. traces],
-        Readings = [.. readings],
-        Rejected = rejected.ToImmutableSortedDictionary(StringComparer.Ordinal),
-        Defects = [],
-        DetectionLimitPixels = Math.Max(settings.Tracing.Narrowest, 3 * blur),
-        BlurPixels = blur,
-        FibreShare = coverage,
-        Algorithm = Algorithm,
-    };
+        {
+            Micrograph = micrograph,
+            Fitness = FitnessMeter.Check(micrograph, new FieldEvidence { Readings = [.. readings], Defects = [] }, settings.Fitness),
+            Traces = [.. traces],
+            Readings = [.. readings],
+            Rejected = rejected.ToImmutableSortedDictionary(StringComparer.Ordinal),
+            Defects = [],
+            DetectionLimitPixels = Math.Max(settings.Tracing.Narrowest, 3 * blur),
+            BlurPixels = blur,
+            FibreShare = coverage,
+            Algorithm = Algorithm,
+        };
 }
