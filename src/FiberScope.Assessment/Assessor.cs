@@ -24,6 +24,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
         var pools = swatch.Layers.Select((layer, i) => Pool(swatch, layer, fields[i])).ToArray();
         LayerFinding[] layers = [.. swatch.Layers.Select((layer, i) => Layer(layer, fields[i], pools[i].Survey))];
         var prediction = Predict(swatch, layers, cancellation);
+        var rig = RigPoints(swatch, prediction);
         return new SwatchAssessment
         {
             Identity = swatch.Identity,
@@ -32,13 +33,14 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             VelocitySweep = prediction?.Sweep() ?? [],
             AirPermeabilities = prediction?.Prediction.Permeabilities ?? [],
             Classes = prediction?.Prediction.Classes ?? [],
+            PressureDropLaws = prediction?.Prediction.PressureDropLaws ?? ImmutableSortedDictionary<string, UnitsNet.Pressure>.Empty,
             Challenges = prediction?.Prediction.Challenges ?? [],
             Bands = prediction?.Prediction.Bands ?? [],
             TotalInwardLeakage = prediction?.Prediction.TotalInwardLeakage,
-            RigPoints = RigPoints(swatch, prediction),
+            RigPoints = rig,
             Verdict = swatch.Grade is null ? null : new GradeJudging(layers, layers[0], prediction?.Findings()).Judge(swatch.Grade),
             Recipe = RecipeKeeping.Of(swatch, settings, layers, clock.GetUtcNow()),
-            Caveats = [.. pools.SelectMany(p => p.Caveats), .. layers.SelectMany(l => l.Solidity?.Caveats ?? []), .. layers.SelectMany(Unmeasured), .. prediction?.Forecast.Caveats ?? [], .. Missing(swatch)],
+            Caveats = [.. pools.SelectMany(p => p.Caveats), .. layers.SelectMany(l => l.Solidity?.Caveats ?? []), .. layers.SelectMany(Unmeasured), .. prediction?.Forecast.Caveats ?? [], .. prediction?.FlowCaveats(rig) ?? [], .. Missing(swatch)],
         };
     }
 

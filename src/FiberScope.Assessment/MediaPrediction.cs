@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using FiberScope.Filtration;
+using UnitsNet;
 
 namespace FiberScope.Assessment;
 
@@ -11,6 +12,9 @@ public sealed record MediaPrediction
 
     /// <summary>Air permeability at 125 Pa and 200 Pa.</summary>
     public required ImmutableArray<AirPermeability> Permeabilities { get; init; }
+
+    /// <summary>Pressure drop of even layers by every law of resistance, by its stable name.</summary>
+    public ImmutableSortedDictionary<string, Pressure> PressureDropLaws { get; init; } = ImmutableSortedDictionary<string, Pressure>.Empty;
 
     /// <summary>The classes of published standards that the forecast points to.</summary>
     public required ImmutableArray<ClassForecast> Classes { get; init; }

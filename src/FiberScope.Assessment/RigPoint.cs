@@ -15,4 +15,11 @@ public sealed record RigPoint(
     Length? Particle,
     double? Penetration,
     Pressure? ForecastPressureDrop,
-    double? ForecastPenetration);
+    double? ForecastPenetration)
+{
+    /// <summary>
+    /// The fibre diameter that the measured pressure drop stands for by Davies' law; null without a pressure drop, a forecast, or where
+    /// several layers share it.
+    /// </summary>
+    public Length? EffectiveDiameter { get; init; }
+}

@@ -26,6 +26,9 @@ public sealed record SwatchAssessment
     /// <summary>The classes of published standards that the forecast points to; empty without a forecast.</summary>
     public ImmutableArray<ClassForecast> Classes { get; init; } = [];
 
+    /// <summary>Pressure drop of even layers by every law of resistance, by its stable name; empty without a forecast.</summary>
+    public ImmutableSortedDictionary<string, UnitsNet.Pressure> PressureDropLaws { get; init; } = ImmutableSortedDictionary<string, UnitsNet.Pressure>.Empty;
+
     /// <summary>What passes of the aerosols that the swatch file asks for; may be empty.</summary>
     public ImmutableArray<ChallengeFinding> Challenges { get; init; } = [];
 
@@ -52,6 +55,7 @@ public sealed record SwatchAssessment
     {
         Forecast = Forecast,
         Permeabilities = AirPermeabilities,
+        PressureDropLaws = PressureDropLaws,
         Classes = Classes,
         Challenges = Challenges,
         Bands = Bands,

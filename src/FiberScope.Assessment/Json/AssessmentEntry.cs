@@ -26,7 +26,7 @@ internal sealed record AssessmentEntry(
         a.Prediction is null ? null : PredictionEntry.Of(a.Prediction),
         [.. a.VelocitySweep.Select(v => new VelocityEntry(v.FaceVelocity.MetersPerSecond, v.PressureDrop.Pascals, v.MostPenetratingSize?.Micrometers, v.Penetration, v.QualityFactorPerPascal))],
         [.. a.AirPermeabilities.Select(PermeabilityEntry.Of)],
-        [.. a.RigPoints.Select(p => new RigEntry(p.FaceVelocity.MetersPerSecond, p.PressureDrop?.Pascals, p.ForecastPressureDrop?.Pascals, p.Particle?.Micrometers, p.Penetration, p.ForecastPenetration))],
+        [.. a.RigPoints.Select(p => new RigEntry(p.FaceVelocity.MetersPerSecond, p.PressureDrop?.Pascals, p.ForecastPressureDrop?.Pascals, p.Particle?.Micrometers, p.Penetration, p.ForecastPenetration, p.EffectiveDiameter?.Micrometers))],
         a.Verdict is null ? null : VerdictEntry.Of(a.Verdict),
         RecipeJson.Of(a.Recipe),
         a.Caveats,
@@ -61,7 +61,7 @@ internal sealed record PermeabilityEntry(double PressureDropPa, double FaceVeloc
 }
 
 /// <summary>A rig result beside its forecast.</summary>
-internal sealed record RigEntry(double FaceVelocityMPerS, double? PressureDropPa, double? ForecastPressureDropPa, double? ParticleUm, double? Penetration, double? ForecastPenetration);
+internal sealed record RigEntry(double FaceVelocityMPerS, double? PressureDropPa, double? ForecastPressureDropPa, double? ParticleUm, double? Penetration, double? ForecastPenetration, double? EffectiveDiameterUm);
 
 /// <summary>The verdict on a grade.</summary>
 internal sealed record VerdictEntry(string Grade, string Decision, bool RestsOnForecast, string Sentence, LimitEntry[] Limits)

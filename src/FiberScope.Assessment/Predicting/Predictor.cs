@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using FiberScope.Assessment.Input;
 using FiberScope.Filtration;
+using FiberScope.Filtration.Drag;
 using UnitsNet;
 
 namespace FiberScope.Assessment.Predicting;
@@ -74,6 +75,7 @@ public static class Predictor
         {
             Forecast = forecast,
             Permeabilities = Permeabilities(layers, operation, settings),
+            PressureDropLaws = PressureDropLaws.All(layers, operation),
             Classes = findings.Classes(),
             Challenges = findings.Challenges(),
             Bands = findings.Bands(),
@@ -107,7 +109,10 @@ public static class Predictor
                 test.Particle,
                 test.Penetration,
                 test.PressureDrop is null ? null : forecast?.PressureDrop,
-                test.Particle is { } size ? forecast?.Curve.MinBy(c => Math.Abs((c.Particle - size).Meters))?.Penetration : null);
+                test.Particle is { } size ? forecast?.Curve.MinBy(c => Math.Abs((c.Particle - size).Meters))?.Penetration : null)
+            {
+                EffectiveDiameter = layers is [var only] && operation is not null && test.PressureDrop is { } drop ? FlowDiameter.Of(only, operation, test.FaceVelocity, drop) : null,
+            };
         }),
     ];
 

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using FiberScope.Assessment.Input;
+using FiberScope.Fibres;
 using FiberScope.Filtration;
 using UnitsNet;
 
@@ -18,6 +19,9 @@ internal sealed class SwatchPrediction(IReadOnlyList<MediaLayer> layers, Operati
     public ImmutableArray<VelocityPoint> Sweep() => Predictor.Sweep(layers, operation, _central, cancellation);
 
     public ImmutableArray<RigPoint> Compare(IEnumerable<RigTest> tests) => Predictor.Compare(tests, layers, operation, _central, cancellation);
+
+    /// <summary>What the rig's pressure drop says about the diameters in the pictures; a swatch of several layers tells nothing.</summary>
+    public ImmutableArray<Caveat> FlowCaveats(IEnumerable<RigPoint> rig) => layers is [var only] ? FlowDiameter.Compare(only, rig) : [];
 
     public ForecastFindings Findings() => new(Forecast, At, pressure => MediaModel.AirPermeability(layers, operation, pressure, _central));
 

@@ -72,7 +72,7 @@ internal static class AssessmentSummary
         Row(table, "air permeability", string.Join(", ", assessment.AirPermeabilities.Select(p => FormattableString.Invariant($"{p.FaceVelocity.MillimetersPerSecond:G4} mm/s"))), "at " + string.Join(" and ", assessment.AirPermeabilities.Select(p => FormattableString.Invariant($"{p.PressureDrop.Pascals:G4} Pa"))));
         foreach (var rig in assessment.RigPoints.Where(r => r.ForecastPressureDrop is not null))
         {
-            Row(table, "rig measured", FormattableString.Invariant($"{rig.PressureDrop!.Value.Pascals:G4} Pa"), FormattableString.Invariant($"forecast {rig.ForecastPressureDrop!.Value.Pascals:G4} Pa at {rig.FaceVelocity.CentimetersPerSecond:G4} cm/s"));
+            Row(table, "rig measured", FormattableString.Invariant($"{rig.PressureDrop!.Value.Pascals:G4} Pa"), FormattableString.Invariant($"forecast {rig.ForecastPressureDrop!.Value.Pascals:G4} Pa at {rig.FaceVelocity.CentimetersPerSecond:G4} cm/s{(rig.EffectiveDiameter is { } d ? FormattableString.Invariant($"; stands for fibres of {d.Micrometers:G3} µm") : "")}"));
         }
 
         foreach (var rig in assessment.RigPoints.Where(r => r.ForecastPenetration is not null))

@@ -122,20 +122,21 @@ internal sealed class ForecastSection : IReportSection
 
     private static Markup Rig(SwatchAssessment assessment)
     {
-        var table = new Table("figures", "rig test at", "pressure drop measured", "forecast", "particle", "penetration measured", "forecast");
+        var table = new Table("figures", "rig test at", "pressure drop measured", "forecast", "stands for fibres of", "particle", "penetration measured", "forecast");
         foreach (var point in assessment.RigPoints)
         {
             table.Row(
                 Wording.Of(point.FaceVelocity),
                 point.PressureDrop is { } measured ? Wording.Of(measured) : "–",
                 point.ForecastPressureDrop is { } forecast ? Wording.Of(forecast) : "–",
+                point.EffectiveDiameter is { } byFlow ? Wording.Of(byFlow) : "–",
                 point.Particle is { } particle ? Wording.Particle(particle) : "–",
                 point.Penetration is { } penetration ? Wording.Percent(penetration) : "–",
                 point.ForecastPenetration is { } expected ? Wording.Percent(expected) : "–");
         }
 
         var rows = table.Finish();
-        return rows.IsEmpty ? rows : Markup.Of($"<h3>Beside what the rig measured</h3>{rows}");
+        return rows.IsEmpty ? rows : Markup.Of($"<h3>Beside what the rig measured</h3>{rows}<p class=\"fine\">Stands for fibres of: the effective fibre diameter of the measured pressure drop by Davies' law (1952). It lies above the diameter in the pictures where fibres lie in ropes or unevenly.</p>");
     }
 
     private static Markup Curve(MediaForecast forecast)
