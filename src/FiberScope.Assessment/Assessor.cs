@@ -40,7 +40,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             RigPoints = rig,
             Verdict = swatch.Grade is null ? null : new GradeJudging(layers, layers[0], prediction?.Findings()).Judge(swatch.Grade),
             Recipe = RecipeKeeping.Of(swatch, settings, layers, clock.GetUtcNow()),
-            Caveats = [.. pools.SelectMany(p => p.Caveats), .. layers.SelectMany(l => l.Solidity?.Caveats ?? []), .. layers.SelectMany(Unmeasured), .. prediction?.Forecast.Caveats ?? [], .. prediction?.FlowCaveats(rig) ?? [], .. Missing(swatch)],
+            Caveats = [.. pools.SelectMany(p => p.Caveats), .. layers.SelectMany(l => l.Solidity?.Caveats ?? []), .. layers.SelectMany(Unmeasured), .. prediction is null ? [] : layers.Zip(swatch.Layers).SelectMany(p => MeasuredTraits.Of(p.First, p.Second.Traits).Caveats), .. prediction?.Forecast.Caveats ?? [], .. prediction?.FlowCaveats(rig) ?? [], .. Missing(swatch)],
         };
     }
 
@@ -64,6 +64,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             Name = layer.Name,
             Fields = fields,
             Survey = survey,
+            Structure = StructurePool.Of(fields),
             Solidity = routes.IsEmpty ? null : SolidityFinding.Combine(routes),
             PolymerName = layer.Material?.Name,
             FibreDensity = layer.Material?.Density,
@@ -81,7 +82,7 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
             return null;
         }
 
-        MediaLayer[] media = [.. layers.Zip(swatch.Layers, (found, told) => told.Traits.PutInto(LayerMedia.Of(found)))];
+        MediaLayer[] media = [.. layers.Zip(swatch.Layers, (found, told) => told.Traits.PutInto(MeasuredTraits.Of(found, told.Traits).PutInto(LayerMedia.Of(found))))];
         return new SwatchPrediction(Predictor.Calibrated(media, swatch.Request), operation, swatch.Request, ForecastSettingsOf(swatch), cancellation);
     }
 

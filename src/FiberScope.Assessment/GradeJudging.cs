@@ -22,6 +22,7 @@ internal sealed class GradeJudging(IReadOnlyList<LayerFinding> layers, LayerFind
             : c == Characteristic.ShotCount ? Count(d => d.Kind == DefectKind.Shot)
             : c == Characteristic.DefectCount ? Count(_ => true)
             : c == Characteristic.DefectArea ? AreaShare()
+            : c == Characteristic.LargestOpening ? LargestOpening()
             : Diameter(c);
     }
 
@@ -108,6 +109,11 @@ internal sealed class GradeJudging(IReadOnlyList<LayerFinding> layers, LayerFind
         var error = Math.Sqrt(shares.Sum(s => (s - mean) * (s - mean)) / (shares.Length - 1) / shares.Length);
         return new ObservedValue(Ratio.FromDecimalFractions(mean), Ratio.FromDecimalFractions(error)) { DegreesOfFreedom = shares.Length - 1 };
     }
+
+    /// <summary>The largest opening of the fields seen; its uncertainty is how much the largest one differs from field to field.</summary>
+    private ObservedValue? LargestOpening() => graded.Structure?.Openings is { Count: > 0 } openings
+        ? new ObservedValue(openings.Largest, openings.LargestUncertainty)
+        : null;
 
     private static double SeenSquareMillimetres(FieldFinding field)
     {

@@ -19,6 +19,9 @@ public sealed record LayerFinding
     /// <summary>The layer's solidity by every route at hand; null when nothing told it.</summary>
     public required SolidityFinding? Solidity { get; init; }
 
+    /// <summary>What the fields that count show besides diameters; null when not looked at.</summary>
+    public MatStructure? Structure { get; init; }
+
     /// <summary>What the fibres are made of, for people; null when not told.</summary>
     public required string? PolymerName { get; init; }
 

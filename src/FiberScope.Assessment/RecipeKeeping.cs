@@ -1,6 +1,7 @@
 using System.Globalization;
 using FiberScope.Assessment.Input;
 using FiberScope.Assessment.Measuring;
+using FiberScope.Assessment.Predicting;
 
 namespace FiberScope.Assessment;
 
@@ -14,7 +15,7 @@ internal static class RecipeKeeping
         SwatchFile = swatch.Name,
         FileHashes = swatch.FileHashes,
         Inputs = [.. swatch.Entries.Select(e => e with { Origin = $"{Path.GetFileName(swatch.Name)}, {e.Origin}" })],
-        Settings = [.. Settings(swatch, settings), .. layers.SelectMany(Densities)],
+        Settings = [.. Settings(swatch, settings), .. layers.SelectMany(Densities), .. layers.Zip(swatch.Layers).SelectMany(p => MeasuredTraits.Of(p.First, p.Second.Traits).Entries)],
         Images = [.. layers.SelectMany(l => l.Fields).Select(Image)],
     };
 

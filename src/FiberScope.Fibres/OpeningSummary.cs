@@ -19,6 +19,15 @@ public sealed record OpeningSummary
     /// <summary>The largest inscribed circle; zero when there is none.</summary>
     public required Length Largest { get; init; }
 
+    /// <summary>The median diameter, every circle counting once; zero when there is none.</summary>
+    public required Length Median { get; init; }
+
+    /// <summary>The geometric standard deviation of the diameters, every circle counting once; 1 when there are none.</summary>
+    public required double GeometricStandardDeviation { get; init; }
+
+    /// <summary>The standard uncertainty of <see cref="Largest"/> as a typical largest one of so many fields, from field to field; zero with fewer than two.</summary>
+    public required Length LargestUncertainty { get; init; }
+
     /// <summary>Openings far larger than the rest of this picture's would make likely.</summary>
     public required int Pinholes { get; init; }
 

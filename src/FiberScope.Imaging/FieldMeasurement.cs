@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using FiberScope.Imaging.Openness;
 
 namespace FiberScope.Imaging;
 
@@ -34,6 +35,9 @@ public sealed record FieldMeasurement
     /// where it says nothing about solidity. Dimensionless, 0 to 1.
     /// </summary>
     public double? FibreShare { get; init; }
+
+    /// <summary>Openings and evenness of cover; null for sections and transmitted light, and where there is nothing to look between.</summary>
+    public FieldOpenness? Openness { get; init; }
 
     /// <summary>Name and version of the algorithms, kept with every result.</summary>
     public required string Algorithm { get; init; }

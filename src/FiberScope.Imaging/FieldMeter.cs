@@ -3,6 +3,7 @@ using FiberScope.Imaging.Coverage;
 using FiberScope.Imaging.Defects;
 using FiberScope.Imaging.Edges;
 using FiberScope.Imaging.Fitness;
+using FiberScope.Imaging.Openness;
 using FiberScope.Imaging.Sections;
 using FiberScope.Imaging.Selection;
 using FiberScope.Imaging.Tracing;
@@ -75,6 +76,7 @@ public static class FieldMeter
             Defects = defects,
             DetectionLimitPixels = Math.Max(2.5, 2 * blur),
             BlurPixels = blur,
+            Openness = readings.IsEmpty ? null : FieldOpenness.Of(micrograph, new FieldEvidence { Readings = readings }.MedianDiameter ?? 1),
             FibreShare = GroundCoverage.Of(micrograph, readings, settings.Coverage),
             Algorithm = Algorithm,
         };

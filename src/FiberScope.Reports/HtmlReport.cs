@@ -14,7 +14,7 @@ public sealed class HtmlReport : IReportWriter
 {
     private static readonly IReportSection[] Sections =
     [
-        new SummarySection(), new CaveatSection(), new DiameterSection(), new SoliditySection(), new ForecastSection(),
+        new SummarySection(), new CaveatSection(), new DiameterSection(), new SoliditySection(), new StructureSection(), new ForecastSection(),
         new FieldSection(), new RecordSection(),
     ];
 

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Text.Json.Serialization;
+using FiberScope.Assessment.Measuring;
 using FiberScope.Conformity;
 using FiberScope.Fibres;
 
@@ -48,7 +49,7 @@ internal sealed record LayerEntry(
         layer.FibreDensity?.KilogramsPerCubicMeter,
         layer.BasisWeight?.GramsPerSquareMeter,
         layer.Thickness?.Micrometers,
-        MeasurementEntry.Of(layer.Fields, layer.Survey, layer.Solidity, layer.Survey.Caveats));
+        MeasurementEntry.Of(layer.Fields, layer.Survey, layer.Solidity, layer.Structure ?? StructurePool.Of(layer.Fields), layer.Survey.Caveats));
 }
 
 /// <summary>The forecast at one face velocity.</summary>

@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using FiberScope.Assessment.Auditing;
 using FiberScope.Assessment.Calibrating;
 using FiberScope.Assessment.Designing;
+using FiberScope.Assessment.Measuring;
 using FiberScope.Fibres;
 
 namespace FiberScope.Assessment.Json;
@@ -15,8 +16,8 @@ public static class JsonDocuments
     /// <param name="solidity">The solidity; null when nothing told it.</param>
     /// <param name="caveats">What a reader must know.</param>
     /// <param name="destination">Where to; left open.</param>
-    public static void Measurement(IEnumerable<FieldFinding> fields, DiameterSurvey? survey, SolidityFinding? solidity, ImmutableArray<Caveat> caveats, Stream destination) =>
-        JsonText.Write(destination, MeasurementEntry.Of(fields, survey, solidity, caveats));
+    public static void Measurement(IReadOnlyList<FieldFinding> fields, DiameterSurvey? survey, SolidityFinding? solidity, ImmutableArray<Caveat> caveats, Stream destination) =>
+        JsonText.Write(destination, MeasurementEntry.Of(fields, survey, solidity, StructurePool.Of(fields), caveats));
 
     /// <summary>Writes a prediction file.</summary>
     /// <param name="prediction">The forecast and what was asked besides.</param>

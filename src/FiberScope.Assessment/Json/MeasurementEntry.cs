@@ -13,17 +13,19 @@ internal sealed record MeasurementEntry(
     FieldEntry[] Fields,
     PooledEntry? Pooled,
     SolidityEntry? Solidity,
+    StructureEntry Structure,
     ImmutableSortedDictionary<string, int> DefectCodes,
     ImmutableArray<Caveat> Caveats)
 {
     private static readonly ImmutableSortedDictionary<string, int> Codes = Enum.GetValues<DefectKind>()
         .ToImmutableSortedDictionary(kind => kind.ToString().ToLowerInvariant(), kind => (int)kind, StringComparer.Ordinal);
 
-    public static MeasurementEntry Of(IEnumerable<FieldFinding> fields, DiameterSurvey? survey, SolidityFinding? solidity, ImmutableArray<Caveat> caveats) => new(
+    public static MeasurementEntry Of(IEnumerable<FieldFinding> fields, DiameterSurvey? survey, SolidityFinding? solidity, MatStructure structure, ImmutableArray<Caveat> caveats) => new(
         Schemas.Measurement,
         [.. fields.Select(FieldEntry.Of)],
         survey is null ? null : PooledEntry.Of(survey),
         solidity is null ? null : SolidityEntry.Of(solidity),
+        StructureEntry.Of(structure),
         Codes,
         caveats);
 }

@@ -10,7 +10,6 @@ namespace FiberScope.Imaging.Coverage;
 /// </remarks>
 internal sealed class GroundCoverage
 {
-    private const int Rounds = 3;
     private readonly byte[] _mask;
     private readonly int _width, _height;
 
@@ -31,16 +30,8 @@ internal sealed class GroundCoverage
         using var field = new Mat(whole, new Rect(0, 0, micrograph.Width, micrograph.UsableHeight));
         using var smooth = new Mat();
         Cv2.GaussianBlur(field, smooth, new Size(0, 0), settings.SmoothingPixels);
-        using var cut = FirstCut(smooth);
-        for (var round = 0; round < Rounds; round++)
-        {
-            if (!Relevel(smooth, cut))
-            {
-                return null;
-            }
-        }
-
-        if (!ShowsGround(field, smooth, cut, settings))
+        using var cut = ForegroundMask.Of(smooth);
+        if (cut is null || !ShowsGround(field, smooth, cut, settings))
         {
             return null;
         }
@@ -50,39 +41,6 @@ internal sealed class GroundCoverage
         var outline = new GroundCoverage(mask, cut.Width, cut.Height).OutlineOff(readings);
         var coverage = share - (outline * Perimeter(cut) / cut.Total());
         return coverage > 0 && coverage <= settings.LargestCoverage ? coverage : null;
-    }
-
-    private static Mat FirstCut(Mat smooth)
-    {
-        using var bytes = new Mat();
-        smooth.ConvertTo(bytes, MatType.CV_8UC1, 255);
-        var cut = new Mat();
-        Cv2.Threshold(bytes, cut, 0, 255, ThresholdTypes.Binary | ThresholdTypes.Otsu);
-        return cut;
-    }
-
-    private static bool Relevel(Mat smooth, Mat cut)
-    {
-        using var open = new Mat();
-        Cv2.BitwiseNot(cut, open);
-        using var inner = new Mat();
-        using var outer = new Mat();
-        Cv2.Erode(cut, inner, null, iterations: 2);
-        Cv2.Erode(open, outer, null, iterations: 3);
-        if (Cv2.CountNonZero(inner) < 100 || Cv2.CountNonZero(outer) < 100)
-        {
-            return false;
-        }
-
-        using var distance = new Mat();
-        Cv2.DistanceTransform(cut, distance, DistanceTypes.L2, DistanceTransformMasks.Mask5);
-        var radius = Math.Max(3, Cv2.Mean(distance, cut).Val0 * 3);
-        using var fibre = LocalLevel.Of(smooth, inner, radius);
-        using var ground = LocalLevel.Of(smooth, outer, 4 * radius);
-        using var level = new Mat();
-        Cv2.AddWeighted(fibre, 0.5, ground, 0.5, 0, level);
-        Cv2.Compare(smooth, level, cut, CmpTypes.GT);
-        return true;
     }
 
     private static bool ShowsGround(Mat field, Mat smooth, Mat cut, CoverageSettings settings)
