@@ -83,7 +83,8 @@ public sealed class Assessor(AssessmentSettings settings, TimeProvider clock)
         }
 
         MediaLayer[] media = [.. layers.Zip(swatch.Layers, (found, told) => told.Traits.PutInto(MeasuredTraits.Of(found, told.Traits).PutInto(LayerMedia.Of(found))))];
-        return new SwatchPrediction(Predictor.Calibrated(media, swatch.Request), operation, swatch.Request, ForecastSettingsOf(swatch), cancellation);
+        var chosen = ForecastSettingsOf(swatch);
+        return new SwatchPrediction(Predictor.Prepared(media, operation, swatch.Request, chosen), operation, swatch.Request, chosen, cancellation);
     }
 
     private ForecastSettings ForecastSettingsOf(SwatchFile swatch)

@@ -89,7 +89,7 @@ public sealed class CalibrationTests(SmallFields fields) : IClassFixture<SmallFi
     }
 
     [Theory]
-    [InlineData("305 um}", "305 um, charge: 3 uC/m2}", "is told by the calibration")]
+    [InlineData("305 um}", "305 um, charge: 3 uC/m2}", "is told by 'calibration' already")]
     [InlineData("calibration: rolls", "correlations: cell\ncalibration: rolls", "the calibration holds for kirsch-stechkina-1978")]
     [InlineData("rolls.calibration.json", "nowhere.json", "no such file")]
     [InlineData("rolls.calibration.json", "next.yaml", "is not a calibration of schema")]

@@ -77,6 +77,34 @@ public sealed class PredictionTests
         Assert.Equal(one["penetration_at_mpps"]!.ToJsonString(), two["penetration_at_mpps"]!.ToJsonString());
     }
 
+    /// <summary>A pair of penetrations made with a known charge gives that charge back, and the forecast that goes with it.</summary>
+    [Fact]
+    public async Task Two_penetrations_tell_the_charge()
+    {
+        const string Bare = "layers: [{fibre_diameter: {median: 1.8 um, gsd: 1.6}, solidity: 0.08, thickness: 310 um CHARGE}]\nface_velocity: 5.3 cm/s\nparticles: [0.3 um]\n";
+        async Task<JsonNode> WithAsync(string charge, string more) => await PredictedAsync(Bare.Replace(" CHARGE", charge, StringComparison.Ordinal) + more);
+        double Passes(JsonNode prediction) => Number(prediction["curve"]![0]!["penetration"]);
+        var (received, discharged) = (await WithAsync(", charge: 30 uC/m2", ""), await WithAsync("", ""));
+        var pair = string.Create(System.Globalization.CultureInfo.InvariantCulture, $"charge_from: {{particle: 0.3 um, as_received: {Passes(received)} ± 5 %, discharged: {Passes(discharged)}}}");
+        var inferred = await WithAsync("", pair);
+        Assert.Equal(Passes(received), Passes(inferred), 1e-4);
+        var note = inferred["warnings"]!.AsArray().Single(w => w!["code"]!.GetValue<string>() == "charge-inferred")!["message"]!.GetValue<string>();
+        Assert.StartsWith("Charge of 30 µC/m²", note, StringComparison.Ordinal);
+        Assert.Equal("charge", inferred["measurement_bands"]!["ranking"]![0]!["input"]!.GetValue<string>());
+    }
+
+    [Theory]
+    [InlineData("charge_from: {particle: 0.3 um, as_received: 2 %}", "needs two penetrations")]
+    [InlineData("charge_from: {particle: 0.3 um, as_received: 2 %, discharged: 100 %}", "between 0 and 1")]
+    [InlineData("charge_from: {particle: 0.3 um, as_received: 2 %, discharged: 40 %}", "is told by 'charge_from' already")]
+    public async Task A_pair_that_cannot_be_used_is_told_in_one_line(string key, string told)
+    {
+        var charge = told.Contains("already", StringComparison.Ordinal) ? "charge: 3 uC/m2, thickness: 310 um" : "thickness: 310 um";
+        var run = await CommandRun.WithInputAsync(Media.Replace("thickness: 310 um", charge, StringComparison.Ordinal) + "\n" + key, "predict", "-", "--json", "-");
+        Assert.Equal(ExitCode.BadInput, run.Code);
+        Assert.Contains(told, Assert.Single(run.ErrorLines), StringComparison.Ordinal);
+    }
+
     private static double Number(JsonNode? node) => node!.GetValue<double>();
 
     private static async Task<JsonNode> PredictedAsync(string media, string seed = "1")

@@ -23,7 +23,7 @@ public static class Designer
     public static DesignFinding Run(DesignFile design, ForecastSettings settings, CancellationToken cancellation)
     {
         var steps = (int)Math.Clamp(Math.Pow(Trials, 1.0 / design.Variables.Length), FewestSteps, MostSteps);
-        var candidates = Search(Predictor.Calibrated(design.Start.Layers, design.Start.Request), design, settings).Search(steps, Kept);
+        var candidates = Search(Predictor.Prepared(design.Start.Layers, design.Start.Operation, design.Start.Request, settings), design, settings).Search(steps, Kept);
         cancellation.ThrowIfCancellationRequested();
         var best = candidates[0];
         var surer = new SurerDesign(design, settings, steps).Find(candidates[0]);

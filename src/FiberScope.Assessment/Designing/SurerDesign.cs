@@ -70,5 +70,5 @@ internal sealed class SurerDesign(DesignFile design, ForecastSettings settings, 
     }
 
     private MediaDesign Search(DesignTargets targets) =>
-        new(Predictor.Calibrated(design.Start.Layers, design.Start.Request), design.Start.Operation, targets, design.Variables, design.FibreDensity, settings);
+        new(Predictor.Prepared(design.Start.Layers, design.Start.Operation, design.Start.Request, settings), design.Start.Operation, targets, design.Variables, design.FibreDensity, settings);
 }

@@ -2,7 +2,6 @@ using System.Collections.Immutable;
 using System.Security.Cryptography;
 using FiberScope.Assessment.Json;
 using FiberScope.Filtration;
-using YamlDotNet.RepresentationModel;
 
 namespace FiberScope.Assessment.Input;
 
@@ -13,7 +12,7 @@ namespace FiberScope.Assessment.Input;
 internal sealed record CalibrationKey(GradeCalibration Calibration, string Name, string Sha256)
 {
     /// <summary>What a calibration tells of every layer, and a layer therefore may not.</summary>
-    private static readonly ImmutableArray<string> Told = ["inhomogeneity_factor", "charge", "basis_weight_variation", "pinholes"];
+    private static readonly ImmutableArray<string> Told = ["inhomogeneity_factor", "charge", "charge_from", "basis_weight_variation", "pinholes"];
 
     /// <summary>The calibration; null when none is named, or when it is wrong and the file has been told.</summary>
     /// <param name="map">The mapping that may name it.</param>
@@ -35,30 +34,13 @@ internal sealed record CalibrationKey(GradeCalibration Calibration, string Name,
                 map.Complain("correlations", $"the calibration holds for {Words.Of(Words.Correlations, calibration.Correlations)}; delete this line, or calibrate again");
             }
 
-            RejectTold(map);
+            map.RejectTold(Told, "calibration");
             return new CalibrationKey(calibration, name, Convert.ToHexStringLower(SHA256.HashData(File.ReadAllBytes(path))));
         }
         catch (InputException e)
         {
             map.Complain("calibration", e.Message);
             return null;
-        }
-    }
-
-    private static void RejectTold(MapReader map)
-    {
-        foreach (var key in Told.Where(map.HasKey))
-        {
-            map.Complain(key, "is told by the calibration; delete this line, or the calibration");
-        }
-
-        foreach (var layer in map.Items("layers").OfType<YamlMappingNode>())
-        {
-            var inner = new MapReader(map.File, layer);
-            foreach (var key in Told.Where(inner.HasKey))
-            {
-                inner.Complain(key, "is told by the calibration; delete this line, or the calibration");
-            }
         }
     }
 }

@@ -19,6 +19,9 @@ public sealed record ForecastRequest
     /// <summary>What passes beside the medium of a mask; null when not told.</summary>
     public MaskLeak? Mask { get; init; }
 
+    /// <summary>Two penetrations that tell the fibre charge; null when none were told.</summary>
+    public ChargePair? ChargePair { get; init; }
+
     /// <summary>What earlier rolls of the grade taught; null without a calibration.</summary>
     public GradeCalibration? Calibration { get; init; }
 }
@@ -39,3 +42,10 @@ public sealed record SizeBand(Length From, Length To);
 /// <param name="Seal">Through the face seal; dimensionless, 0 to 1.</param>
 /// <param name="Valve">Through the exhalation valve; dimensionless, 0 to 1.</param>
 public sealed record MaskLeak(double Seal, double Valve);
+
+/// <summary>A penetration as received and one discharged, at the operating point, which together tell the fibre charge.</summary>
+/// <param name="Particle">The particle size of both.</param>
+/// <param name="AsReceived">Penetration as received; dimensionless, in (0, 1).</param>
+/// <param name="Discharged">Penetration discharged; dimensionless, in (0, 1).</param>
+/// <param name="RelativeUncertainty">Relative standard uncertainty of each; dimensionless.</param>
+public sealed record ChargePair(Length Particle, double AsReceived, double Discharged, double RelativeUncertainty);

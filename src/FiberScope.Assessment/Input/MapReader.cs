@@ -157,6 +157,16 @@ internal sealed class MapReader(InputText file, YamlMappingNode node)
         return null;
     }
 
+    /// <summary>Reports keys that something else tells already, here and in every layer.</summary>
+    public void RejectTold(IEnumerable<string> keys, string by)
+    {
+        MapReader[] maps = [this, .. Items("layers").OfType<YamlMappingNode>().Select(layer => new MapReader(file, layer))];
+        foreach (var (map, key) in maps.SelectMany(m => keys.Where(m.HasKey).Select(key => (m, key))))
+        {
+            map.Complain(key, $"is told by '{by}' already; delete one of the two");
+        }
+    }
+
     /// <summary>A mapping; null when absent or when the value is none.</summary>
     public MapReader? Map(string key) => Find(key) is { } value ? AsMap(value, key) : null;
 

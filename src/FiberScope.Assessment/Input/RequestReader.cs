@@ -8,7 +8,10 @@ namespace FiberScope.Assessment.Input;
 internal static class RequestReader
 {
     /// <summary>The keys that ask for something.</summary>
-    public static readonly ImmutableArray<string> Keys = ["challenge", "size_bands", "mask"];
+    public static readonly ImmutableArray<string> Keys = ["challenge", "size_bands", "mask", "charge_from"];
+
+    /// <summary>Relative standard uncertainty of a penetration that was told without one. Common practice, no source.</summary>
+    private const double UsualUncertainty = 0.05;
 
     private static readonly string[] OwnKeys = ["count_median", "mass_median", "gsd", "by"];
 
@@ -16,12 +19,18 @@ internal static class RequestReader
     public static ForecastRequest Read(MapReader map)
     {
         var area = MediaArea(map);
+        if (map.Has("charge_from"))
+        {
+            map.RejectTold(["charge"], "charge_from");
+        }
+
         return new ForecastRequest
         {
             MediaArea = area,
             Challenges = Challenges(map, area),
             Bands = Bands(map),
             Mask = map.Map("mask") is { } mask ? Mask(mask) : null,
+            ChargePair = map.Map("charge_from") is { } pair ? Pair(pair) : null,
         };
     }
 
@@ -163,5 +172,22 @@ internal static class RequestReader
         }
 
         return seal is null ? null : new MaskLeak(seal.Value, valve ?? 0);
+    }
+
+    private static ChargePair? Pair(MapReader map)
+    {
+        var particle = map.Positive("particle", Kinds.Length)?.Value;
+        var received = map.InsideStated("as_received", 0, 1);
+        var discharged = map.InsideStated("discharged", 0, 1);
+        map.RejectUnknownKeys();
+        if (!map.Has("particle") || !map.Has("as_received") || !map.Has("discharged"))
+        {
+            map.File.Report(map.Line, "charge_from: needs two penetrations at the face velocity of the file, such as {particle: 0.3 um, as_received: 2.2 %, discharged: 48 %}");
+        }
+
+        var uncertainty = Math.Max(received?.RelativeUncertainty ?? 0, discharged?.RelativeUncertainty ?? 0);
+        return particle is { } size && received is not null && discharged is not null
+            ? new ChargePair(size, received.Value, discharged.Value, uncertainty > 0 ? uncertainty : UsualUncertainty)
+            : null;
     }
 }

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using FiberScope.Assessment.Input;
+using FiberScope.Fibres;
 using FiberScope.Filtration;
 using FiberScope.Filtration.Drag;
 using UnitsNet;
@@ -34,7 +35,14 @@ public static class Predictor
     public static MediaPrediction Predict(MediaFile media, CorrelationSet? chosen, ForecastSettings standard, CancellationToken cancellation)
     {
         var settings = Settings(media.Request, chosen ?? media.Correlations, standard);
-        return Predict(Calibrated(media.Layers, media.Request), media.Operation, media.Request, settings, cancellation);
+        return Predict(Prepared(media.Layers, media.Operation, media.Request, settings), media.Operation, media.Request, settings, cancellation);
+    }
+
+    /// <summary>The layers with what a calibration teaches and the charge that two penetrations tell.</summary>
+    public static IReadOnlyList<MediaLayer> Prepared(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastRequest request, ForecastSettings settings)
+    {
+        var calibrated = Calibrated(layers, request);
+        return request.ChargePair is { } pair ? ChargeFromPair.PutInto(calibrated, operation, pair, settings) : calibrated;
     }
 
     /// <summary>The layers with what the calibration teaches; as they are without one.</summary>
@@ -64,10 +72,8 @@ public static class Predictor
     public static MediaPrediction Predict(IReadOnlyList<MediaLayer> layers, OperatingPoint operation, ForecastRequest request, ForecastSettings settings, CancellationToken cancellation)
     {
         var forecast = Forecast(layers, operation, settings, cancellation);
-        if (request.Calibration is { } calibration)
-        {
-            forecast = forecast with { Caveats = [calibration.Note, .. calibration.Caveats, .. forecast.Caveats] };
-        }
+        Caveat[] calibrated = request.Calibration is { } calibration ? [calibration.Note, .. calibration.Caveats] : [];
+        forecast = forecast with { Caveats = [.. calibrated, .. ChargeFromPair.Notes(layers, operation, request, settings), .. forecast.Caveats] };
 
         var findings = new RequestedFindings(layers, operation, request, settings);
         cancellation.ThrowIfCancellationRequested();
