@@ -73,8 +73,8 @@ internal sealed class FibreTracer
             return null;
         }
 
-        var rival = Rival(track, seed.Level, width);
-        return rival < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width, _picture.GreyNoise) is { } strip
+        var rival = Rival.Of(_trackers, track, seed.Level, width, _widest);
+        return rival.Share < _settings.RivalShare && RibbonStrip.Of(_picture.Linear, track, width, _picture.GreyNoise) is { } strip
             ? Judge.Judge(strip, rival, InsideTexture.Of(strip, _finest!))
             : null;
     }
@@ -88,46 +88,6 @@ internal sealed class FibreTracer
         }
 
         return length;
-    }
-
-    /// <summary>The score of the best wider ribbon that shares one of the edges all along, over the track's own.</summary>
-    /// <remarks>A fibre is equally wide along its length: an edge of another fibre that happens to run beside it for a bit is no rival.</remarks>
-    private double Rival(List<TrackPoint> track, int level, double width)
-    {
-        const int Stations = 3;
-        var own = new List<(TrackPoint At, double Score)>();
-        for (var s = 0; s < Stations; s++)
-        {
-            var at = track[track.Count * ((2 * s) + 1) / (2 * Stations)];
-            if (_trackers[level].Score(at.X, at.Y, at.Normal, at.HalfWidth) is var score and > 0)
-            {
-                own.Add((at, score));
-            }
-        }
-
-        var best = own.Count == 0 ? 1.0 : 0;
-        for (var wide = 2.2 * width; own.Count > 0 && wide < Math.Min(_widest, 10 * width); wide *= 1.3)
-        {
-            for (var side = -1; side <= 1; side += 2)
-            {
-                best = Math.Max(best, Series.Median([.. own.Select(s => Wider(s.At, wide, side) / s.Score)]));
-            }
-        }
-
-        return best;
-    }
-
-    private double Wider(TrackPoint at, double wide, int side)
-    {
-        var (sin, cos) = Math.SinCos(at.Normal);
-        var (edgeX, edgeY) = (at.X + (side * at.HalfWidth * cos), at.Y + (side * at.HalfWidth * sin));
-        var level = 0;
-        while (level < _trackers.Length - 1 && wide / (1 << level) > 13)
-        {
-            level++;
-        }
-
-        return _trackers[level].Score(edgeX - (side * wide / 2 * cos), edgeY - (side * wide / 2 * sin), at.Normal, wide / 2);
     }
 
     /// <summary>Whether another fibre of the same direction holds ground anywhere between the edges: two fibres, or a part of one.</summary>

@@ -14,6 +14,12 @@ internal sealed class Ribbon(RibbonStrip strip, bool[] accepted, double[] widths
     /// <summary>For each row the width between the edges, running median where accepted; pixels.</summary>
     public double[] Widths { get; } = widths;
 
+    /// <summary>Difference of the levels outside (right less left) over the contrast, median over the accepted rows; dimensionless.</summary>
+    public double Asymmetry { get; init; }
+
+    /// <summary>How well a ribbon several times as wide, lying on the brighter side, shares an edge: its score over this one's own.</summary>
+    public double Body { get; init; }
+
     /// <summary>How much speaks for the ribbon: contrast times the root of its accepted length, less for wide claims and rivals.</summary>
     public double Evidence { get; } = evidence;
 

@@ -11,7 +11,7 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
     /// <summary>How many stations were refused, by reason.</summary>
     public IReadOnlyDictionary<string, int> Refused => _refused;
 
-    public Ribbon? Judge(RibbonStrip strip, double rival, double[] texture)
+    public Ribbon? Judge(RibbonStrip strip, Rival rival, double[] texture)
     {
         var rows = strip.Rows;
         var width = 2 * Series.Median([.. Enumerable.Range(0, rows).Select(r => strip.Half[r])]);
@@ -55,19 +55,20 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
         return Whole(strip, looks, accepted, widths, width, rival);
     }
 
-    private Ribbon? Whole(RibbonStrip strip, StripLook looks, bool[] accepted, double[] widths, double width, double rival)
+    private Ribbon? Whole(RibbonStrip strip, StripLook looks, bool[] accepted, double[] widths, double width, Rival rival)
     {
         var count = accepted.Count(a => a);
         var length = count * strip.Step;
         var share = count / (double)accepted.Length;
         var contrast = count == 0 ? 0 : Series.Median([.. Enumerable.Range(0, accepted.Length).Where(r => accepted[r]).Select(r => Math.Min(looks.ContrastLeft[r], looks.ContrastRight[r]))]);
         var peak = Series.Median([.. looks.Peak.Where((_, r) => accepted[r])]);
+        var asymmetry = Series.Median([.. looks.Asymmetry.Where((_, r) => accepted[r])]);
         var sure = settings.RibbonSignificance * noise.At(peak) * GreyNoise.LevelShare(strip.Along, Math.Max(0.5, 0.015 * width));
         var why = count > 0 && contrast < sure ? "faint"
             : count > 0 && Series.Median([.. widths.Where((_, r) => accepted[r])]) < settings.Narrowest ? "too-thin"
             : length < Math.Max(12, width) ? "too-short"
             : share < settings.LeastAccepted ? "mostly-hidden"
-            : rival + Math.Abs(Series.Median([.. looks.Asymmetry.Where((_, r) => accepted[r])])) + 1 - share > 0.95 ? "rim-or-gap"
+            : rival.Share + Math.Abs(asymmetry) + 1 - share > 0.95 ? "rim-or-gap"
             : Series.Spread([.. widths.Where((_, r) => accepted[r])]) > 0.25 ? "uneven-width"
             : null;
         if (why is not null)
@@ -76,7 +77,11 @@ internal sealed class RibbonJudge(TracingSettings settings, GreyNoise noise)
             return null;
         }
 
-        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast, contrast * Math.Sqrt(length) * Math.Pow(width, -WidthDoubt) * (1 - (0.5 * rival)));
+        return new Ribbon(strip, accepted, Runs.Median(widths, accepted, 4 * width / strip.Step), contrast, contrast * Math.Sqrt(length) * Math.Pow(width, -WidthDoubt) * (1 - (0.5 * rival.Share)))
+        {
+            Asymmetry = asymmetry,
+            Body = asymmetry > 0 ? rival.BodyRight : rival.BodyLeft,
+        };
     }
 
     private string? Reason(RibbonStrip strip, StripLook looks, int r, double width)

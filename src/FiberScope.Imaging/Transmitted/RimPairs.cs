@@ -119,7 +119,7 @@ internal sealed class RimPairs(StabilisedPicture picture, Plane passed, RibbonJu
             track.Add(new TrackPoint((float)(strip.X[r] + (across * strip.Nx[r])), (float)(strip.Y[r] + (across * strip.Ny[r])), (float)Math.Atan2(strip.Ny[r], strip.Nx[r]), (float)(width / 2), 1));
         }
 
-        return RibbonStrip.Of(picture.Linear, track, width, picture.GreyNoise) is { } found ? judge.Judge(found, 0, new double[found.Rows]) : null;
+        return RibbonStrip.Of(picture.Linear, track, width, picture.GreyNoise) is { } found ? judge.Judge(found, default(Rival), new double[found.Rows]) : null;
     }
 
     /// <summary>Whether most of a ribbon's ground is free in its direction; what is not is no longer accepted, what is gets taken.</summary>

@@ -1,4 +1,5 @@
 using CsCheck;
+using FiberScope.Specimens;
 
 namespace FiberScope.Imaging.Tests.Tracing;
 
@@ -47,6 +48,21 @@ public sealed class FieldMeterTests
     [Fact]
     public void The_dark_gap_between_two_fibres_is_no_fibre() =>
         Assert.All(Measure(CylinderPicture.Of((160, 130, 0, 24), (160, 170, 0, 24))).Readings, r => Assert.InRange(r.Diameter, 22, 26));
+
+    [Theory]
+    [InlineData(0.4)]
+    [InlineData(0.9)]
+    [InlineData(1.5)]
+    public void Bright_rims_of_wide_fibres_are_not_read_as_thin_fibres(double rim)
+    {
+        var family = SpecimenFamilies.Find("spun-bonded")!;
+        var specimen = VirtualSpecimen.Make(family with { WidthPixels = 900, HeightPixels = 700, Electrons = family.Electrons with { RimHeight = rim, RimCap = 3.8 } }, 71, TestContext.Current.CancellationToken);
+        var grey = specimen.Pixels.ToArray().Select(p => p / 255f).ToArray();
+        var found = Measure(new Micrograph(grey, 900, 700, family.PixelSize, ImagingMode.SecondaryElectron, new MicrographSource("spun-bonded", "", 0, 8, "recipe"), 700 - specimen.Truth.Recipe.FieldRows));
+        var thinnest = specimen.Truth.Stations.Min(t => t.Diameter);
+        Assert.True(found.Readings.Length > 50);
+        Assert.InRange(found.Readings.Where(r => r.Diameter < 0.6 * thinnest).Sum(r => r.RepresentedLength) / found.Readings.Sum(r => r.RepresentedLength), 0, 0.02);
+    }
 
     [Fact]
     public void Mirroring_or_turning_a_picture_leaves_the_mean_where_it_was()
