@@ -18,6 +18,9 @@ internal sealed class FibreTracer
 
     public RibbonJudge Judge { get; }
 
+    /// <summary>Whether bright rims are looked for, as in transmitted light, and not only whole fibres. Default no.</summary>
+    public bool WantsRims { get; init; }
+
     /// <summary>The fibres, best evidence first; none of them claims another's ground.</summary>
     public List<Ribbon> Run(CancellationToken cancellation)
     {
@@ -138,6 +141,7 @@ internal sealed class FibreTracer
             chosen.Add(ribbon);
         }
 
-        return SecondLook.At(Streaks.Removed(chosen, _picture.Linear.Width, _picture.Linear.Height));
+        var whole = Streaks.Removed(chosen, _picture.Linear.Width, _picture.Linear.Height);
+        return SecondLook.At(whole, WantsRims);
     }
 }

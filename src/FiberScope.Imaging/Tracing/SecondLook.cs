@@ -15,7 +15,7 @@ internal static class SecondLook
     private const int LeastRibbons = 10;
 
     /// <summary>The ribbons that stand the second look, in the same order.</summary>
-    public static List<Ribbon> At(List<Ribbon> ribbons)
+    public static List<Ribbon> At(List<Ribbon> ribbons, bool wantsRims)
     {
         if (ribbons.Count < LeastRibbons)
         {
@@ -27,7 +27,7 @@ internal static class SecondLook
         var areRims = narrow.Length > 0 && Typical(narrow, r => Math.Abs(r.Asymmetry), Length) > RimsMostly;
         return
         [
-            .. ribbons.Where(r => r.Width >= RimShare * width || !(areRims || (Math.Abs(r.Asymmetry) > RimAlone && r.Body > FarEdge)))
+            .. ribbons.Where(r => wantsRims || r.Width >= RimShare * width || !(areRims || (Math.Abs(r.Asymmetry) > RimAlone && r.Body > FarEdge)))
                 .Where(r => r.Contrast >= WeakShare * contrast || r.Width >= NarrowShare * width),
         ];
     }

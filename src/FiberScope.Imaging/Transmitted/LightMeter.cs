@@ -24,7 +24,7 @@ internal static class LightMeter
             return Result(micrograph, settings, [], [], new Dictionary<string, int>(StringComparer.Ordinal), 0, null);
         }
 
-        var tracer = new FibreTracer(picture, tracing, widest);
+        var tracer = new FibreTracer(picture, tracing, widest) { WantsRims = true };
         var passed = new Plane(light.Width, light.Height, light.Passed);
         var lines = tracer.Run(cancellation);
         var fibres = new RimPairs(picture, passed, tracer.Judge, settings.Transmitted.LeastEvenFlanks).Fibres(lines).Select(r => (Ribbon: r, Fit: RimProfile.Of(r, passed) is { } profile ? RimModel.Fit(profile) : null)).ToArray();
