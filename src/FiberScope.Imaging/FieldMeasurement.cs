@@ -39,6 +39,9 @@ public sealed record FieldMeasurement
     /// <summary>Openings and evenness of cover; null for sections and transmitted light, and where there is nothing to look between.</summary>
     public FieldOpenness? Openness { get; init; }
 
+    /// <summary>The share of visible edge by direction, see <see cref="EdgeDirections"/>; empty for sections and transmitted light.</summary>
+    public ImmutableArray<double> EdgeShares { get; init; } = [];
+
     /// <summary>Name and version of the algorithms, kept with every result.</summary>
     public required string Algorithm { get; init; }
 }

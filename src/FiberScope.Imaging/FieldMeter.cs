@@ -77,6 +77,7 @@ public static class FieldMeter
             DetectionLimitPixels = Math.Max(2.5, 2 * blur),
             BlurPixels = blur,
             Openness = readings.IsEmpty ? null : FieldOpenness.Of(micrograph, new FieldEvidence { Readings = readings }.MedianDiameter ?? 1),
+            EdgeShares = EdgeDirections.Of(micrograph),
             FibreShare = GroundCoverage.Of(micrograph, readings, settings.Coverage),
             Algorithm = Algorithm,
         };

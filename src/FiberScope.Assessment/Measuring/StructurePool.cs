@@ -27,24 +27,32 @@ public static class StructurePool
         return new MatStructure(Orientation(counted), Openings(counted), Uniformity(counted), Defects(counted));
     }
 
+    /// <summary>From the edges where the fields show them, else from the readings: those are rare where fibres lie close and nearly parallel.</summary>
     private static OrientationSummary? Orientation(FieldMeasurement[] fields)
     {
-        var pieces = fields.SelectMany(f => f.Readings.Select(r => (r.Direction, Length: r.RepresentedLength * f.Micrograph.PixelSize.Meters))).ToArray();
-        var total = pieces.Sum(p => p.Length);
-        if (!(total > 0) || fields[0].Micrograph.Mode == ImagingMode.CrossSection)
+        if (fields.Length == 0 || fields[0].Micrograph.Mode == ImagingMode.CrossSection)
         {
             return null;
         }
 
-        var (cosine, sine) = (pieces.Sum(p => p.Length * Math.Cos(2 * p.Direction)), pieces.Sum(p => p.Length * Math.Sin(2 * p.Direction)));
+        (double Direction, double Weight)[] pieces = fields.Any(f => !f.EdgeShares.IsEmpty)
+            ? [.. fields.SelectMany(f => f.EdgeShares.Select((share, i) => ((i + 0.5) * Math.PI / f.EdgeShares.Length, share * Seen(f))))]
+            : [.. fields.SelectMany(f => f.Readings.Select(r => (r.Direction, r.RepresentedLength * f.Micrograph.PixelSize.Meters)))];
+        var total = pieces.Sum(p => p.Weight);
+        return total > 0 ? Orientation(pieces, total) : null;
+    }
+
+    private static OrientationSummary Orientation((double Direction, double Weight)[] pieces, double total)
+    {
+        var (cosine, sine) = (pieces.Sum(p => p.Weight * Math.Cos(2 * p.Direction)), pieces.Sum(p => p.Weight * Math.Sin(2 * p.Direction)));
         var degrees = Math.Atan2(sine, cosine) / 2 * 180 / Math.PI;
         var shares = new double[Classes];
-        foreach (var (direction, length) in pieces)
+        foreach (var (direction, weight) in pieces)
         {
-            shares[(int)Math.Clamp(direction / Math.PI * Classes, 0, Classes - 1)] += length / total;
+            shares[(int)Math.Clamp(direction / Math.PI * Classes, 0, Classes - 1)] += weight / total;
         }
 
-        var machine = pieces.Where(p => Math.Cos(2 * p.Direction) < 0).Sum(p => p.Length);
+        var machine = pieces.Where(p => Math.Cos(2 * p.Direction) < 0).Sum(p => p.Weight);
         return new OrientationSummary
         {
             PrincipalDirection = Angle.FromDegrees(degrees < 0 ? degrees + 180 : degrees),

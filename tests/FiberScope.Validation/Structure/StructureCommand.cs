@@ -14,11 +14,20 @@ internal static class StructureCommand
         var family = new Option<string>("--family") { Description = "The family.", DefaultValueFactory = _ => "cross-sections" };
         var swatches = new Option<int>("--swatches") { Description = "Swatches.", DefaultValueFactory = _ => 4 };
         var fields = new Option<int>("--fields") { Description = "Fields of each.", DefaultValueFactory = _ => 3 };
-        var command = new Command("structure", "Measure solidity by images on virtual specimens.") { seeds, family, swatches, fields };
+        var orientation = new Option<bool>("--orientation") { Description = "Instead of solidity: the orientation of the fibres." };
+        var command = new Command("structure", "Measure solidity by images, or orientation, on virtual specimens.") { seeds, family, swatches, fields, orientation };
         command.SetAction(parsed =>
         {
             var reporting = parsed.GetValue(seeds) == "report";
             var recipe = SpecimenFamilies.Find(parsed.GetValue(family)!) ?? throw new ArgumentException("No such family.", nameof(parsed));
+            if (parsed.GetValue(orientation))
+            {
+                var turned = OrientationCheck.Of(recipe, reporting, parsed.GetValue(fields));
+                Console.WriteLine(FormattableString.Invariant($"{turned.Family}: direction true {turned.TrueDirection:0.0} read {turned.ReadDirection:0.0}, order true {turned.TrueOrder:0.000} read {turned.ReadOrder:0.000}"));
+                FigureStore.Save($"{(reporting ? "report" : "dev")}-{recipe.Name}-orientation", turned);
+                return 0;
+            }
+
             SolidityFigures[] rows = [.. SolidityCheck.Of(recipe, reporting, parsed.GetValue(swatches), parsed.GetValue(fields))];
             foreach (var row in rows)
             {
